@@ -1,0 +1,1 @@
+"""Mechanics of sag, springs, frequency and rebound for suspension set-up."""
