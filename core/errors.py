@@ -26,11 +26,11 @@ class SetupError(ValueError):
         self.data = data
 
 
-class InvalidInput(SetupError):
+class InvalidInputError(SetupError):
     """One input is outside its valid range, or inputs contradict each other."""
 
 
-class NoSolution(SetupError):
+class NoSolutionError(SetupError):
     """The inputs are valid, but the physics has no answer to the question."""
 
 
