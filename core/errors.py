@@ -7,6 +7,9 @@ person's own units and language. The English sentences live in `core.messages`.
 from collections.abc import Mapping
 from dataclasses import dataclass, field
 
+import numpy as np
+from numpy.typing import NDArray
+
 from core.messages import sentence
 
 
@@ -17,7 +20,10 @@ class SetupError(ValueError):
         code: stable name of the situation, a key of `core.messages.MESSAGES`.
         field: name of the parameter to look at first, or None when it is their combination.
         data: the numbers in the sentence, in SI units; each key ends in its unit (`travel_m`).
+        where: of array inputs, the elements at fault; None where the error doesn't tell.
     """
+
+    where: NDArray[np.bool_] | None = None
 
     def __init__(self, code: str, field: str | None = None, **data: float | str) -> None:
         super().__init__(sentence(code, data))

@@ -12,6 +12,17 @@ MESSAGES: Final[dict[str, str]] = {
     # Inputs in general
     "not_finite": "{name} is not a number: enter it again.",
     "not_positive": "{name} must be greater than zero.",
+    "negative": "{name} must not be negative.",
+    # Uncertainty
+    "too_uncertain": (
+        "Within their ±, {outside_percent} of the readings allow no answer: measure more closely."
+    ),
+    "no_finite_result": "These numbers are too large or too small to compute with: check units.",
+    "interval_order": "{name} must run from low over value to high.",
+    "sample_count": "The number of samples must be even and at least 40.",
+    "no_readings": "Enter at least one reading.",
+    # Atmosphere
+    "altitude_range": "Altitude {altitude_m} is outside −500 to 11 000 m: check the unit.",
 }
 
 _SUFFIX_UNITS: Final = {
