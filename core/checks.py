@@ -5,7 +5,7 @@ how `core.uncertainty.propagate` can drop the few samples of a broad distributio
 outside a function's domain, count them, and go on with the others.
 """
 
-from typing import TypeAlias
+from typing import Final, TypeAlias
 
 import numpy as np
 from numpy.typing import ArrayLike, NDArray
@@ -15,6 +15,9 @@ from core.errors import InvalidInputError, SetupError
 FloatArray: TypeAlias = NDArray[np.float64]
 Quantity: TypeAlias = float | FloatArray
 """A number or an array of numbers; functions of several quantities broadcast them."""
+
+SMALLEST: Final = 1e-12  # [SI unit] a positive quantity below is a slip, not a bicycle's
+LARGEST: Final = 1e12  # [SI unit] likewise above; products of several stay far from overflow
 
 
 def require(
@@ -66,13 +69,15 @@ def positive(name: str, value: Quantity) -> Quantity:
 
     Args:
         name: the parameter's name, for the message.
-        value: any quantity.
+        value: any quantity; between `SMALLEST` and `LARGEST` of its SI unit.
 
     Raises:
-        InvalidInputError: code ``not_finite`` or ``not_positive``.
+        InvalidInputError: code ``not_finite``, ``not_positive`` or ``beyond_any_bike``.
     """
     finite(name, value)
     require(np.greater(value, 0.0), "not_positive", name, name=name)
+    meant = np.less_equal(SMALLEST, value) & np.less_equal(value, LARGEST)
+    require(meant, "beyond_any_bike", name, name=name)
     return value
 
 
@@ -81,13 +86,14 @@ def not_negative(name: str, value: Quantity) -> Quantity:
 
     Args:
         name: the parameter's name, for the message.
-        value: any quantity.
+        value: any quantity up to `LARGEST` of its SI unit.
 
     Raises:
-        InvalidInputError: code ``not_finite`` or ``negative``.
+        InvalidInputError: code ``not_finite``, ``negative`` or ``beyond_any_bike``.
     """
     finite(name, value)
     require(np.greater_equal(value, 0.0), "negative", name, name=name)
+    require(np.less_equal(value, LARGEST), "beyond_any_bike", name, name=name)
     return value
 
 

@@ -13,6 +13,7 @@ MESSAGES: Final[dict[str, str]] = {
     "not_finite": "{name} is not a number: enter it again.",
     "not_positive": "{name} must be greater than zero.",
     "negative": "{name} must not be negative.",
+    "beyond_any_bike": "{name} is far beyond anything on a bike: check the unit.",
     # Uncertainty
     "too_uncertain": (
         "Within their ±, {outside_percent} of the readings allow no answer: measure more closely."
@@ -21,6 +22,56 @@ MESSAGES: Final[dict[str, str]] = {
     "interval_order": "{name} must run from low over value to high.",
     "sample_count": "The number of samples must be even and at least 40.",
     "no_readings": "Enter at least one reading.",
+    # Oscillator
+    "undamped_resonance": (
+        "Without damping the movement at resonance grows without limit: enter a damping ratio."
+    ),
+    "not_underdamped": "A damping ratio of {damping_ratio} swings no more: it must be below 1.",
+    "overshoot_range": (
+        "The overshoot must be more than nothing and less than the push: measure both from the "
+        "sag mark. No overshoot at all means a damping ratio of about 0.8 or more."
+    ),
+    # Rebound
+    "too_quick": (
+        "It passed the mark sooner than this spring can throw it even without damping: count the "
+        "frames again, or check the frequency."
+    ),
+    "passes_late": (
+        "It passed the mark so late that it hardly passed at all: enter that it did not pass."
+    ),
+    "friction_range": (
+        "Friction holds the wheel against at least half of the push: push further, and have seals "
+        "and bushings looked at."
+    ),
+    "friction_stops_it": (
+        "With this much friction it should have stopped before the mark: read the two-sided sag "
+        "and the frames again."
+    ),
+    "timing_too_coarse": (
+        "A time that is good to ±{timing_s} cannot tell slow rebound from fast here: film it at "
+        "120 frames per second or more, or measure how far it overshoots the sag mark."
+    ),
+    "overshoot_beyond_sag": (
+        "The overshoot reaches the sag of {sag_m}, so the suspension topped out: push less far."
+    ),
+    "friction_unknown": (
+        "Friction is not measured, so the damping ratio may read too high (by about 0.05 for each "
+        "20th of the push that friction holds): read the sag from both sides."
+    ),
+    "damping_open_low": "The readings cannot exclude hardly any damping at all.",
+    "damping_open_high": "The readings cannot tell how much more damping there is.",
+    "band_order": "The band must run from a lower to a higher damping ratio, both below 1.",
+    "clicks_no_effect": (
+        "The two settings cannot be told apart within their ±: try two that lie further apart."
+    ),
+    "clicks_wrong_way": (
+        "There was more damping with the adjuster further open: check that clicks are counted "
+        "from fully closed, and that the two readings are not swapped."
+    ),
+    "clicks_step": (
+        "The target lies far outside the two settings tried: make this step, measure again."
+    ),
+    "adjuster_end": "The adjuster ends before the target: have the damper looked at or retuned.",
     # Atmosphere
     "altitude_range": "Altitude {altitude_m} is outside −500 to 11 000 m: check the unit.",
 }

@@ -49,7 +49,8 @@ class Measured:
     def __post_init__(self) -> None:
         """Refuse what is no number."""
         finite("value", self.value)
-        not_negative("sd", self.sd)
+        finite("sd", self.sd)
+        require(self.sd >= 0.0, "negative", "sd", name="sd")
 
 
 @dataclass(frozen=True)
