@@ -1,0 +1,124 @@
+"""The whole build: from pinned wheels and our sources to a folder that any static host can serve.
+
+The folder is made beside its final place and moved there in one step; what interrupts a build
+leaves the earlier folder as it was.
+"""
+
+import shutil
+import tempfile
+import tomllib
+from collections.abc import Mapping
+from pathlib import Path
+
+from mobileapp.pwa.app_icons import app_icons
+from mobileapp.pwa.client import build_client
+from mobileapp.pwa.compress import compressed
+from mobileapp.pwa.files import write_tree
+from mobileapp.pwa.inputs import fetch, read_pins
+from mobileapp.pwa.manifest import manifest, screenshots
+from mobileapp.pwa.notices import notices
+from mobileapp.pwa.numpy_wheel import fetch_numpy
+from mobileapp.pwa.paths import CHECKOUT, PAGE
+from mobileapp.pwa.problem import BuildProblem
+from mobileapp.pwa.progress import say, step
+from mobileapp.pwa.python import build_python
+from mobileapp.pwa.release import LIST, assemble
+from mobileapp.pwa.sources import app_sources, fingerprint
+
+# Written beside the folder, not into it: what it was built from.
+STAMP_SUFFIX = ".built-from"
+
+# The page's files that stay at the site's root; the others belong to their release.
+_AT_ROOT = ("index.html", "sw.js")
+
+
+def build(out: Path) -> None:
+    """Build the site into `out`.
+
+    Raises:
+        BuildProblem: `out` is something else than an earlier build, or a step failed.
+        OSError: the disk is full or `out` can't be written.
+    """
+    _refuse_to_overwrite(out)
+    mark = fingerprint()
+    site = make_site()
+    total = sum(map(len, site.values()))
+    with step(f"Compressing {total / 1e6:.0f} MB for the transfer (slow the first time)"):
+        twins = compressed(site)
+    _put_in_place(out, site | twins)
+    _stamp(out).write_text(mark, encoding="utf-8")
+    say(f"Built {out}: {len(site)} files.")
+
+
+def is_current(out: Path) -> bool:
+    """Tell whether `out` holds a build of exactly the present sources and pins."""
+    return (
+        (out / LIST).exists()
+        and _stamp(out).exists()
+        and _stamp(out).read_text(encoding="utf-8") == fingerprint()
+    )
+
+
+def make_site() -> dict[str, bytes]:
+    """Make every file of the site, contents by path, without the compressed twins."""
+    pins = read_pins()
+    wheels = {**fetch(pins), "numpy": fetch_numpy()}
+    sources = app_sources()
+    with step("Compiling Python for the browser"):
+        python = build_python(wheels)
+    with step("Assembling the web client"):
+        client = build_client(wheels["flet-web"], sources)
+    page = _page()
+    shots = screenshots()
+    root = {path: page.pop(path) for path in _AT_ROOT}
+    root |= app_icons() | shots
+    root["manifest.webmanifest"] = manifest(shots)
+    inside = page | {"app.pack": python.app_pack, "late.pack": python.late_pack}
+    inside |= _below("client/", client) | _below("python/", python.runtime)
+    inside |= _below("notices/", notices(wheels, {pin.name: pin for pin in pins}))
+    return assemble(root, inside, _version())
+
+
+def _page() -> dict[str, bytes]:
+    page = {
+        str(path.relative_to(PAGE)): path.read_bytes()
+        for path in sorted(PAGE.rglob("*"))
+        if path.is_file() and "__pycache__" not in path.parts
+    }
+    if missing := [path for path in _AT_ROOT if path not in page]:
+        raise BuildProblem(f"The page lacks {' and '.join(missing)}, expected in {PAGE}.")
+    return page
+
+
+def _below(folder: str, files: Mapping[str, bytes]) -> dict[str, bytes]:
+    return {folder + path: content for path, content in files.items()}
+
+
+def _version() -> str:
+    project = tomllib.loads((CHECKOUT / "pyproject.toml").read_text(encoding="utf-8"))
+    return str(project["project"]["version"])
+
+
+def _stamp(out: Path) -> Path:
+    return out.with_name(out.name + STAMP_SUFFIX)
+
+
+def _refuse_to_overwrite(out: Path) -> None:
+    if out.exists() and not (out / LIST).exists() and (not out.is_dir() or any(out.iterdir())):
+        raise BuildProblem(f"{out} holds something else than a build; name another folder.")
+
+
+def _put_in_place(out: Path, files: Mapping[str, bytes]) -> None:
+    """Write a complete folder beside `out`, then swap it in."""
+    out.parent.mkdir(parents=True, exist_ok=True)
+    beside = Path(tempfile.mkdtemp(prefix=f".{out.name}-", dir=out.parent))
+    try:
+        fresh, old = beside / "fresh", beside / "old"
+        fresh.mkdir()
+        write_tree(fresh, files)
+        _stamp(out).unlink(missing_ok=True)
+        if out.exists():
+            out.rename(old)
+        fresh.rename(out)
+    finally:
+        shutil.rmtree(beside, ignore_errors=True)

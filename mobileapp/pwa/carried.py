@@ -1,0 +1,71 @@
+"""Which Python modules come along into the browser, and which stay at home.
+
+What stays is whole modules and whole sub-packages, never some files out of one that is used.
+An import of one of them in the browser is a plain ModuleNotFoundError. That nothing carried
+needs them is shown by the tests, which import every carried module in the browser's own Python.
+"""
+
+# Standard library: tools of developers, servers and clients of protocols that a page can't speak,
+# processes and terminals, pure-Python twins of compiled modules.
+_STDLIB_AT_HOME = """
+    _pyrepl antigravity bdb cProfile cmd code compileall doctest modulefinder pdb pickletools
+    profile pstats py_compile pyclbr pydoc rlcompleter symtable tabnanny this timeit trace unittest
+    zipapp __hello__ __phello__
+
+    _ssl ftplib html http imaplib mailbox netrc poplib smtplib socketserver ssl webbrowser wsgiref
+    xmlrpc email importlib.metadata mimetypes quopri
+
+    ctypes curses dbm getpass multiprocessing pty readline shelve sqlite3 tty
+    argparse configparser fileinput filecmp getopt gettext optparse sched
+
+    _pyio _pydatetime _pydecimal
+    colorsys difflib nturl2path plistlib stringprep tomllib wave xml.dom xml.sax
+""".split()  # noqa: SIM905  # a paragraph reads better than a line a name
+
+# Every text the app reads or writes is Unicode; these are all of `encodings` that isn't a national
+# character set.
+_ENCODINGS = """
+    __init__ aliases ascii base64_codec charmap cp437 hex_codec latin_1 raw_unicode_escape
+    unicode_escape utf_16 utf_16_be utf_16_le utf_32 utf_32_be utf_32_le utf_8 utf_8_sig
+""".split()  # noqa: SIM905  # a paragraph reads better than a line a name
+
+# Packages: tests, servers, command lines, log-in services, headers for compilers.
+_PACKAGES_AT_HOME = """
+    flet.auth flet.cli flet.fastapi flet.pytest_plugin flet.security flet.testing flet.utils.pip
+    flet_charts.matplotlib_backends
+    msgpack.fallback
+    numpy._core._multiarray_tests numpy._core._operand_flag_tests numpy._core._rational_tests
+    numpy._core._simd numpy._core._struct_ufunc_tests numpy._core._umath_tests
+    numpy._core.cversions numpy._core.include numpy._core.lib numpy._core.tests numpy._pyinstaller
+    numpy._typing.tests numpy.conftest numpy.core numpy.ctypeslib numpy.distutils numpy.doc
+    numpy.f2py numpy.fft numpy.lib.tests numpy.linalg.lapack_lite numpy.linalg.tests numpy.ma
+    numpy.matlib numpy.matrixlib.tests numpy.polynomial numpy.random numpy.testing numpy.tests
+    numpy.typing
+""".split()  # noqa: SIM905  # a paragraph reads better than a line a name
+
+# What Python or a package reads beside its modules.
+_DATA = ("flet/controls/material/icons.json",)
+
+
+def module_name(path: str) -> str:
+    """Give the dotted name of a file of code: `flet/app.py` and `flet/__init__.py` alike."""
+    stem = path.partition(".")[0]
+    return stem.removesuffix("/__init__").replace("/", ".")
+
+
+def stdlib_module_is_carried(path: str) -> bool:
+    """Tell whether a file of the standard library comes along."""
+    if path.startswith("encodings/"):
+        return path.removesuffix(".py").partition("/")[2] in _ENCODINGS
+    return path.endswith(".py") and not _within(module_name(path), _STDLIB_AT_HOME)
+
+
+def package_file_is_carried(path: str) -> bool:
+    """Tell whether a file of a wheel comes along: code that isn't left at home, or its data."""
+    if path in _DATA:
+        return True
+    return path.endswith((".py", ".so")) and not _within(module_name(path), _PACKAGES_AT_HOME)
+
+
+def _within(module: str, families: list[str]) -> bool:
+    return any(module == name or module.startswith(f"{name}.") for name in families)
