@@ -61,6 +61,7 @@ MESSAGES: Final[dict[str, str]] = {
     "damping_open_low": "The readings cannot exclude hardly any damping at all.",
     "damping_open_high": "The readings cannot tell how much more damping there is.",
     "band_order": "The band must run from a lower to a higher damping ratio, both below 1.",
+    "damping_target": "The damping ratio to aim at must lie between 0 and 1.",
     "clicks_no_effect": (
         "The two settings cannot be told apart within their ±: try two that lie further apart."
     ),
@@ -72,6 +73,30 @@ MESSAGES: Final[dict[str, str]] = {
         "The target lies far outside the two settings tried: make this step, measure again."
     ),
     "adjuster_end": "The adjuster ends before the target: have the damper looked at or retuned.",
+    # Trail
+    "residual_range": "The share of a bump that may be left must lie between 0 and 1.",
+    "crossover_order": "The crossover must run from a lower to a higher shaft speed.",
+    "packing_indication": (
+        "Recovery between bumps is an indication only: it holds for more than three bumps per "
+        "swing of the body and a rebound damping ratio of at least 0.5."
+    ),
+    "wheel_leaves_ground": (
+        "At this speed the wheel cannot follow the bumps and leaves the ground at their crests: "
+        "mean position and recovery are indications only."
+    ),
+    "wheel_may_leave_ground": "Within the ± the wheel may leave the ground at the crests.",
+    "stroke_bottoms": (
+        "The stroke needs more than the {room_m} of travel left: the suspension would bottom out."
+    ),
+    "stroke_tops_out": (
+        "The stroke needs more than the {room_m} that it can extend: the suspension would top out."
+    ),
+    "damping_uneven": (
+        "Rebound and compression damping differ by more than 4 to 1: amplitudes may be off by "
+        "more than 5 percent."
+    ),
+    # Balance
+    "sag_band_order": "A sag target must run from a lower to a higher share of the travel.",
     # Atmosphere
     "altitude_range": "Altitude {altitude_m} is outside −500 to 11 000 m: check the unit.",
 }
