@@ -8,7 +8,11 @@ from dataclasses import dataclass
 from pathlib import Path
 
 from mobileapp.pwa.bytecode import compile_all
-from mobileapp.pwa.carried import package_file_is_carried, stdlib_module_is_carried
+from mobileapp.pwa.carried import (
+    package_file_is_carried,
+    stdlib_module_is_carried,
+    without_documentation,
+)
 from mobileapp.pwa.icon_names import keep_used_icons
 from mobileapp.pwa.pack import pack
 from mobileapp.pwa.scripts import without_source_map
@@ -41,7 +45,7 @@ def build_python(wheels: Mapping[str, Path]) -> Python:
     stdlib = _stdlib_sources(runtime[STDLIB])
     packages = {
         name: {
-            path: content
+            path: without_documentation(path, content)
             for path, content in read_wheel(wheel).items()
             if package_file_is_carried(path)
         }
