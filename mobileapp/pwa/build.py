@@ -4,6 +4,7 @@ The folder is made beside its final place and moved there in one step; what inte
 leaves the earlier folder as it was.
 """
 
+import json
 import shutil
 import tempfile
 import tomllib
@@ -57,6 +58,23 @@ def is_current(out: Path) -> bool:
         and _stamp(out).exists()
         and _stamp(out).read_text(encoding="utf-8") == fingerprint()
     )
+
+
+def check_complete(site: Path) -> None:
+    """Make sure that a folder is a build with all its files.
+
+    Raises:
+        BuildProblem: it is not.
+    """
+    if not (site / LIST).exists():
+        raise BuildProblem(f"There is no build in {site}; run `python -m mobileapp build` first.")
+    for entry in json.loads((site / LIST).read_text(encoding="utf-8"))["files"]:
+        file = site / entry["path"]
+        if not file.is_file() or file.stat().st_size != entry["bytes"]:
+            raise BuildProblem(
+                f"The build in {site} is damaged at {entry['path']}; "
+                "delete the folder and build again."
+            )
 
 
 def make_site() -> dict[str, bytes]:

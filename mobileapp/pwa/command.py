@@ -6,11 +6,10 @@ import sys
 from collections.abc import Sequence
 from pathlib import Path
 
-from mobileapp.pwa.build import build, is_current
+from mobileapp.pwa.build import build, check_complete, is_current
 from mobileapp.pwa.paths import DEFAULT_SITE
 from mobileapp.pwa.problem import BuildProblem
 from mobileapp.pwa.progress import say
-from mobileapp.pwa.release import LIST
 from mobileapp.pwa.server import make_server
 
 PORT = 8765
@@ -52,10 +51,9 @@ def serve(site: Path, host: str, port: int) -> None:
     """Serve a built folder until interrupted.
 
     Raises:
-        BuildProblem: there is no build, or the port can't be opened.
+        BuildProblem: there is no whole build, or the port can't be opened.
     """
-    if not (site / LIST).exists():
-        raise BuildProblem(f"There is no build in {site}; run `python -m mobileapp build` first.")
+    check_complete(site)
     with make_server(site, host, port) as server:
         say(
             f"\nOpen http://localhost:{server.server_port}/ in a browser on this machine."
