@@ -13,7 +13,9 @@ from mobileapp.pwa.inputs import Pin, fetch, read_pins
 from mobileapp.pwa.problem import BuildProblem
 
 
-def make_wheel(folder, name="springy", version="1.0", content="RATE = 1\n", needs="", member=None):
+def make_wheel(
+    folder, name="springy", *, version="1.0", content="RATE = 1\n", needs="", member=None
+):
     """Write the smallest wheel that pip takes, and give its pin."""
     stem = name.replace("-", "_")
     about = f"{stem}-{version}.dist-info"
@@ -98,7 +100,7 @@ def carrier(shelf, monkeypatch):
         pin = make_wheel(
             shelf,
             "open-webui",
-            "0.12.4",
+            version="0.12.4",
             content=numpy,
             needs="Requires-Python: <3.13,>=3.11\n",
             member=numpy_wheel.MEMBER,
