@@ -64,6 +64,21 @@ def finite(name: str, value: Quantity) -> Quantity:
     return value
 
 
+def bounded(name: str, value: Quantity) -> Quantity:
+    """Return a quantity of either sign after checking that its size is one of a bike's.
+
+    Args:
+        name: the parameter's name, for the message.
+        value: any quantity up to `LARGEST` of its SI unit, either sign.
+
+    Raises:
+        InvalidInputError: code ``not_finite`` or ``beyond_any_bike``.
+    """
+    finite(name, value)
+    require(np.less_equal(np.abs(value), LARGEST), "beyond_any_bike", name, name=name)
+    return value
+
+
 def positive(name: str, value: Quantity) -> Quantity:
     """Return a quantity after checking that it is finite and greater than zero everywhere.
 
@@ -74,10 +89,9 @@ def positive(name: str, value: Quantity) -> Quantity:
     Raises:
         InvalidInputError: code ``not_finite``, ``not_positive`` or ``beyond_any_bike``.
     """
-    finite(name, value)
+    bounded(name, value)
     require(np.greater(value, 0.0), "not_positive", name, name=name)
-    meant = np.less_equal(SMALLEST, value) & np.less_equal(value, LARGEST)
-    require(meant, "beyond_any_bike", name, name=name)
+    require(np.greater_equal(value, SMALLEST), "beyond_any_bike", name, name=name)
     return value
 
 
@@ -91,9 +105,8 @@ def not_negative(name: str, value: Quantity) -> Quantity:
     Raises:
         InvalidInputError: code ``not_finite``, ``negative`` or ``beyond_any_bike``.
     """
-    finite(name, value)
+    bounded(name, value)
     require(np.greater_equal(value, 0.0), "negative", name, name=name)
-    require(np.less_equal(value, LARGEST), "beyond_any_bike", name, name=name)
     return value
 
 

@@ -116,7 +116,12 @@ _SUFFIX_UNITS: Final = {
 
 
 def show_si(key: str, value: float | str) -> str:
-    """Return a value as text with the SI unit that the last part of its key names."""
+    """Return a value as text with the SI unit that the last part of its key names.
+
+    Args:
+        key: name of the quantity, its unit at the end (``travel_m``).
+        value: the quantity; text stays as it is.
+    """
     if isinstance(value, str):
         return value
     unit = _SUFFIX_UNITS.get(key.rpartition("_")[2])

@@ -14,7 +14,7 @@ from typing import Final
 
 import numpy as np
 
-from core.checks import FloatArray, Quantity, not_negative, positive, require
+from core.checks import SMALLEST, FloatArray, Quantity, not_negative, positive, require
 from core.constants import STANDARD_GRAVITY
 from core.errors import NoSolutionError
 
@@ -230,9 +230,8 @@ def free_response(time: Quantity, frequency: Quantity, damping_ratio: Quantity) 
     slow = -1.0 / (damping_ratio + root)
     spread = -2.0 * root * phase
     with np.errstate(under="ignore"):  # long settled: zero is the answer
-        quotient = np.divide(
-            np.expm1(spread), spread, out=np.ones_like(spread), where=np.not_equal(spread, 0.0)
-        )
+        apart = np.abs(spread) > SMALLEST
+        quotient = np.divide(np.expm1(spread), spread, out=np.ones_like(spread), where=apart)
         position = np.exp(slow * phase) * (1.0 - slow * phase * quotient)
     share: FloatArray = position.real
     return share[()]

@@ -23,7 +23,7 @@ from typing import Final
 
 import numpy as np
 
-from core.checks import FloatArray, Quantity, finite, not_negative, positive, require
+from core.checks import FloatArray, Quantity, bounded, finite, not_negative, positive, require
 from core.errors import NoSolutionError
 from core.oscillator import TURN, damped_frequency, damping_from_overshoot
 
@@ -151,9 +151,9 @@ def damping_from_release(
         InvalidInputError: a quantity isn't finite or is outside its range; ``friction_range``;
             ``overshoot_range`` if there is none, or more than friction alone would leave.
     """
-    finite("overshoot", overshoot)
+    ratio = overshoot_ratio(push, overshoot, friction_deflection)
     require(np.greater(overshoot, 0.0), "overshoot_range", "overshoot")
-    return damping_from_overshoot(overshoot_ratio(push, overshoot, friction_deflection))
+    return damping_from_overshoot(ratio)
 
 
 def overshoot_ratio(
@@ -175,7 +175,7 @@ def overshoot_ratio(
     push = positive("push", push)
     friction_deflection = not_negative("friction_deflection", friction_deflection)
     _check_friction(friction_deflection / push)
-    return (finite("overshoot", overshoot) + friction_deflection) / (push - friction_deflection)
+    return (bounded("overshoot", overshoot) + friction_deflection) / (push - friction_deflection)
 
 
 def settling_time(frequency: Quantity, damping_ratio: Quantity) -> Quantity:
