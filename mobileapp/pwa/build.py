@@ -9,6 +9,7 @@ import shutil
 import tempfile
 import tomllib
 from collections.abc import Mapping
+from contextlib import suppress
 from pathlib import Path
 
 from mobileapp.pwa.app_icons import app_icons
@@ -131,12 +132,12 @@ def _put_in_place(out: Path, files: Mapping[str, bytes]) -> None:
     out.parent.mkdir(parents=True, exist_ok=True)
     beside = Path(tempfile.mkdtemp(prefix=f".{out.name}-", dir=out.parent))
     try:
-        fresh, old = beside / "fresh", beside / "old"
+        fresh = beside / "fresh"
         fresh.mkdir()
         write_tree(fresh, files)
         _stamp(out).unlink(missing_ok=True)
-        if out.exists():
-            out.rename(old)
+        with suppress(FileNotFoundError):
+            out.rename(beside / "old")
         fresh.rename(out)
     finally:
         shutil.rmtree(beside, ignore_errors=True)

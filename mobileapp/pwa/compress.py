@@ -1,8 +1,8 @@
 """Compressed twins of the built files, for hosts that can send them.
 
 `main.dart.js.br` and `main.dart.js.gz` stand beside `main.dart.js`. A host that doesn't know
-them still serves the app, only with more bytes. Brotli's best setting is slow (1 to 3 MB a
-second down to half of that), so its results are kept between builds under the content's hash.
+them still serves the app, only with more bytes. Brotli's best setting takes about two
+seconds a megabyte, so its results are kept between builds under the content's hash.
 """
 
 import gzip
@@ -13,10 +13,14 @@ from hashlib import sha256
 import brotli
 
 from mobileapp.pwa.kept import kept
+from mobileapp.pwa.progress import say
 
 # Already compressed, or too small to gain.
 _AS_THEY_ARE = (".png", ".woff2", ".gz", ".br")
 _SMALLEST = 512
+
+# Files that take long enough for the person who waits to want to hear of them.
+_WORTH_A_LINE = 1_000_000
 
 # A gzip file stores a time; zero says "none".
 _NO_TIME = 0
@@ -47,8 +51,14 @@ def compressed(files: Mapping[str, bytes]) -> dict[str, bytes]:
     def compress(job: tuple[str, str]) -> bytes:
         path, ending = job
         content = files[path]
-        key = f"{sha256(content).hexdigest()}{ending}"
-        return kept("compressed", key, lambda: _WAYS[ending](content))
+
+        def make() -> bytes:
+            twin = _WAYS[ending](content)
+            if len(content) > _WORTH_A_LINE:
+                say(f"  {path}{ending}: {len(content) / 1e6:.1f} to {len(twin) / 1e6:.1f} MB")
+            return twin
+
+        return kept("compressed", f"{sha256(content).hexdigest()}{ending}", make)
 
     with ThreadPoolExecutor() as threads:
         twins = zip(jobs, threads.map(compress, jobs), strict=True)

@@ -6,7 +6,6 @@ lasting caches for releases, the security headers, no listing of folders.
 
 import errno
 import posixpath
-from email.utils import formatdate
 from functools import partial
 from http import HTTPStatus
 from http.server import BaseHTTPRequestHandler, ThreadingHTTPServer
@@ -74,7 +73,6 @@ class SiteHandler(BaseHTTPRequestHandler):
             self.send_response(HTTPStatus.OK)
             self.send_header("Content-Type", _TYPES.get(file.suffix, _OTHER_TYPE))
             self.send_header("Content-Length", str(size))
-            self.send_header("Last-Modified", formatdate(sent.stat().st_mtime, usegmt=True))
             self.send_header("Cache-Control", cache_control(path or ""))
             self.send_header("Vary", "Accept-Encoding")
             if encoding:
@@ -107,6 +105,7 @@ class SiteHandler(BaseHTTPRequestHandler):
 
 class _Server(ThreadingHTTPServer):
     daemon_threads = True
+    request_queue_size = 64  # a first visit opens several connections at once
 
     def handle_error(self, request: object, client_address: object) -> None:
         """Say nothing when a browser hangs up early, which it may."""

@@ -3,13 +3,16 @@
 pip works here on a folder of made-up wheels, never on the network.
 """
 
+import tomllib
 import zipfile
 from hashlib import sha256
 
+import flet
 import pytest
 
 from mobileapp.pwa import inputs, numpy_wheel
 from mobileapp.pwa.inputs import Pin, fetch, read_pins
+from mobileapp.pwa.paths import CHECKOUT
 from mobileapp.pwa.problem import BuildProblem
 
 
@@ -90,6 +93,15 @@ def test_every_carried_wheel_is_pinned_to_one_version_and_content():
     pins = read_pins()
     assert {pin.name for pin in pins} >= {"flet", "flet-charts", "flet-web", "msgpack"}
     assert len({pin.name for pin in pins}) == len(pins)
+
+
+def test_the_carried_flet_is_the_one_that_the_project_is_written_with():
+    project = tomllib.loads((CHECKOUT / "pyproject.toml").read_text("utf-8"))["project"]
+    pins = {f"{pin.name}=={pin.version}" for pin in read_pins()}
+    written_with = {line for line in project["dependencies"] if line.startswith("flet")}
+    assert written_with
+    assert written_with <= pins
+    assert {pin.version for pin in read_pins() if pin.name.startswith("flet")} == {flet.__version__}
 
 
 @pytest.fixture
