@@ -5,6 +5,8 @@ platform, and refuses anything that differs; what it brings is kept under its ha
 cache, and hashed again before each build, so a damaged cache is noticed and fetched anew.
 """
 
+import errno
+import os
 import re
 import subprocess
 import sys
@@ -126,6 +128,8 @@ def _reason(pip_said: str, pins: Iterable[Pin]) -> str:
             f"A download of {names} differs from its pinned SHA-256, so nothing was built; "
             "try again, and if it stays so, don't trust the source."
         )
+    if os.strerror(errno.ENOSPC) in pip_said:
+        return f"The disk is full: no room to download {names}."
     errors = [line for line in pip_said.splitlines() if line.startswith("ERROR:")]
     said = errors[-1].removeprefix("ERROR:").strip() if errors else "pip gave no reason"
     return f"Could not download {names} ({said}); check the connection and try again."

@@ -3,6 +3,7 @@
 pip works here on a folder of made-up wheels, never on the network.
 """
 
+import subprocess
 import tomllib
 import zipfile
 from hashlib import sha256
@@ -80,6 +81,16 @@ def test_a_missing_network_is_one_sentence(shelf):
         fetch([absent])
     assert "\n" not in str(e.value)
     assert not list(shelf.iterdir())
+
+
+def test_a_disk_that_fills_up_while_pip_downloads_is_one_sentence(shelf, monkeypatch):
+    pin = make_wheel(shelf)
+    # What pip 26 ends with when its temporary folder is full, a traceback before it.
+    said = "ERROR: Exception:\nTraceback ...\nOSError: [Errno 28] No space left on device\n"
+    failed = subprocess.CompletedProcess([], 2, stderr=said)
+    monkeypatch.setattr(subprocess, "run", lambda *_, **__: failed)
+    with pytest.raises(BuildProblem, match=r"^The disk is full: no room to download springy"):
+        fetch([pin])
 
 
 def test_a_line_that_pins_nothing_is_refused(tmp_path):
