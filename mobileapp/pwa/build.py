@@ -11,6 +11,7 @@ import tomllib
 from collections.abc import Mapping
 from contextlib import suppress
 from pathlib import Path
+from typing import Any
 
 from mobileapp.pwa.app_icons import app_icons
 from mobileapp.pwa.client import build_client
@@ -27,9 +28,6 @@ from mobileapp.pwa.python import build_python
 from mobileapp.pwa.release import LIST, assemble
 from mobileapp.pwa.sources import app_sources, fingerprint
 
-# Written beside the folder, not into it: what it was built from.
-STAMP_SUFFIX = ".built-from"
-
 # The page's files that stay at the site's root; the others belong to their release.
 _AT_ROOT = ("index.html", "sw.js")
 
@@ -42,23 +40,19 @@ def build(out: Path) -> None:
         OSError: the disk is full or `out` can't be written.
     """
     _refuse_to_overwrite(out)
-    mark = fingerprint()
     site = make_site()
     total = sum(map(len, site.values()))
     with step(f"Compressing {total / 1e6:.0f} MB for the transfer (slow the first time)"):
         twins = compressed(site)
     _put_in_place(out, site | twins)
-    _stamp(out).write_text(mark, encoding="utf-8")
     say(f"Built {out}: {len(site)} files.")
 
 
 def is_current(out: Path) -> bool:
     """Tell whether `out` holds a build of exactly the present sources and pins."""
-    return (
-        (out / LIST).exists()
-        and _stamp(out).exists()
-        and _stamp(out).read_text(encoding="utf-8") == fingerprint()
-    )
+    if not (out / LIST).exists():
+        return False
+    return bool(_list(out)["sources"] == fingerprint())
 
 
 def check_complete(site: Path) -> None:
@@ -69,7 +63,7 @@ def check_complete(site: Path) -> None:
     """
     if not (site / LIST).exists():
         raise BuildProblem(f"There is no build in {site}; run `python -m mobileapp build` first.")
-    for entry in json.loads((site / LIST).read_text(encoding="utf-8"))["files"]:
+    for entry in _list(site)["files"]:
         file = site / entry["path"]
         if not file.is_file() or file.stat().st_size != entry["bytes"]:
             raise BuildProblem(
@@ -80,6 +74,7 @@ def check_complete(site: Path) -> None:
 
 def make_site() -> dict[str, bytes]:
     """Make every file of the site, contents by path, without the compressed twins."""
+    mark = fingerprint()  # first: a change made while we build must not pass for built
     pins = read_pins()
     wheels = {**fetch(pins), "numpy": fetch_numpy()}
     sources = app_sources()
@@ -95,7 +90,7 @@ def make_site() -> dict[str, bytes]:
     inside = page | {"app.pack": python.app_pack, "late.pack": python.late_pack}
     inside |= _below("client/", client) | _below("python/", python.runtime)
     inside |= _below("notices/", notices(wheels, {pin.name: pin for pin in pins}))
-    return assemble(root, inside, _version())
+    return assemble(root, inside, _version(), mark)
 
 
 def _page() -> dict[str, bytes]:
@@ -118,8 +113,8 @@ def _version() -> str:
     return str(project["project"]["version"])
 
 
-def _stamp(out: Path) -> Path:
-    return out.with_name(out.name + STAMP_SUFFIX)
+def _list(site: Path) -> dict[str, Any]:
+    return json.loads((site / LIST).read_text(encoding="utf-8"))
 
 
 def _refuse_to_overwrite(out: Path) -> None:
@@ -135,7 +130,6 @@ def _put_in_place(out: Path, files: Mapping[str, bytes]) -> None:
         fresh = beside / "fresh"
         fresh.mkdir()
         write_tree(fresh, files)
-        _stamp(out).unlink(missing_ok=True)
         with suppress(FileNotFoundError):
             out.rename(beside / "old")
         fresh.rename(out)

@@ -15,7 +15,8 @@ from mobileapp.pwa.wheel import read_folder
 
 FOLDER = "flet_web/web/"
 
-# Who renders with which: browsers with Chromium's text and image code take the smaller one.
+# Who renders with which: Flutter's loader takes the smaller one where the browser brings
+# Chromium's own text and image code (`Intl.v8BreakIterator`, `Intl.Segmenter`, `ImageDecoder`).
 ENGINES = {"canvaskit/chromium/": "chromium", "canvaskit/": "other"}
 
 _TAKEN = (

@@ -19,7 +19,8 @@ something does. The page's files may hold these placeholders:
                     a browser takes what is for its own engine or for none in particular
 
 `release.json` lists every served file with bytes and SHA-256, except itself and `sw.js`, which
-holds the list: {"release", "version", "files": [{"path", "bytes", "sha256"}, …]}.
+holds the list: {"release", "version", "sources", "files": [{"path", "bytes", "sha256"}, …]}.
+"sources" is a fingerprint of what it was built from, by which a build knows that it is current.
 """
 
 import json
@@ -42,7 +43,7 @@ _TEXT = (".html", ".js", ".mjs", ".css", ".webmanifest", ".json", ".py", ".svg")
 
 
 def assemble(
-    root: Mapping[str, bytes], inside: Mapping[str, bytes], version: str
+    root: Mapping[str, bytes], inside: Mapping[str, bytes], version: str, sources: str
 ) -> dict[str, bytes]:
     """Give the whole built folder, contents by path.
 
@@ -50,6 +51,7 @@ def assemble(
         root: files at fixed addresses, by path; among them index.html and sw.js.
         inside: files of this release only, by path below r/<release>/.
         version: the project's version.
+        sources: fingerprint of the sources.
     """
     release = _release_id({**root, **{f"r/{path}": content for path, content in inside.items()}})
     values = {"{{release}}": release, "{{version}}": version}
@@ -63,6 +65,7 @@ def assemble(
         {
             "release": release,
             "version": version,
+            "sources": sources,
             "files": [
                 {
                     "path": path,

@@ -17,11 +17,12 @@ from mobileapp.pwa.files import write_whole
 from mobileapp.pwa.paths import CHECKOUT
 from mobileapp.pwa.problem import BuildProblem
 from mobileapp.pwa.release import assemble
+from mobileapp.pwa.sources import fingerprint
 
 
 def small_site(text=b"hello"):
     root = {"index.html": text, "sw.js": b"const FILES = {{files}};"}
-    return assemble(root, {"boot.js": b"// {{release}}"}, "1.0")
+    return assemble(root, {"boot.js": b"// {{release}}"}, "1.0", fingerprint())
 
 
 @pytest.fixture
@@ -54,7 +55,7 @@ def test_a_build_lies_in_its_folder_and_nothing_beside_it(tmp_path):
     out = tmp_path / "deep" / "site"
     build(out)
     assert json.loads((out / "release.json").read_text())["files"]
-    assert {path.name for path in out.parent.iterdir()} == {"site", "site.built-from"}
+    assert {path.name for path in out.parent.iterdir()} == {"site"}
 
 
 @pytest.mark.usefixtures("small")
@@ -80,7 +81,7 @@ def test_a_failed_build_leaves_the_earlier_one_untouched(
     assert shown.startswith(said)
     assert shown.count("\n") == 1
     assert contents(out) == before
-    assert {path.name for path in tmp_path.iterdir()} == {"site", "site.built-from"}
+    assert {path.name for path in tmp_path.iterdir()} == {"site"}
 
 
 @pytest.mark.usefixtures("small")
