@@ -102,9 +102,14 @@ def compare_ends(front: EndState, rear: EndState) -> Balance:
     front_sag, rear_sag = _sag_verdict(front), _sag_verdict(rear)
     frequency = _compare(front.frequency, rear.frequency, FREQUENCY_BAND)
     damping = _compare(front.rebound, rear.rebound, DAMPING_BAND)
+    off_target: list[tuple[float, Change]] = []
+    if front_sag in _CLEARLY_OFF:
+        off_target.append((_miss(front), "front_sag"))
+    if rear_sag in _CLEARLY_OFF:
+        off_target.append((_miss(rear), "rear_sag"))
     balance = Balance(front_sag, rear_sag, frequency, damping, "nothing")
-    further_off: Change = "front_sag" if _miss(front) >= _miss(rear) else "rear_sag"
-    return replace(balance, first=_first_change(balance, further_off))
+    first = max(off_target)[1] if off_target else _first_besides_sag(balance)
+    return replace(balance, first=first)
 
 
 def _sag_verdict(end: EndState) -> SagVerdict | None:
@@ -161,19 +166,21 @@ def _miss(end: EndState) -> float:
     return max(low - end.sag.value, end.sag.value - high, 0.0)
 
 
-def _first_change(balance: Balance, further_off: Change) -> Change:
-    """Return what to do first; `further_off` names the end whose sag is further off."""
+def _first_besides_sag(balance: Balance) -> Change:
+    """Return what to do first where no sag is clearly off its target."""
     sags = (balance.front_sag, balance.rear_sag)
-    others = (balance.frequency, balance.damping)
-    verdicts = [other.verdict for other in others if other]
-    clear = ("front_higher", "rear_higher")
+    frequency = balance.frequency and balance.frequency.verdict
+    damping = balance.damping and balance.damping.verdict
     steps: tuple[tuple[bool, Change], ...] = (
-        ("too_little" in sags or "too_much" in sags, further_off),
         (None in sags, "measure_sag"),
         ("unclear" in sags, "measure_again"),
-        (balance.frequency is not None and balance.frequency.verdict in clear, "frequency"),
-        (balance.damping is not None and balance.damping.verdict in clear, "damping"),
-        ("unclear" in verdicts, "measure_again"),
-        (balance.damping is None, "measure_rebound"),
+        (frequency in _CLEARLY_UNLIKE, "frequency"),
+        (damping in _CLEARLY_UNLIKE, "damping"),
+        ("unclear" in (frequency, damping), "measure_again"),
+        (damping is None, "measure_rebound"),
     )
     return next((change for applies, change in steps if applies), "nothing")
+
+
+_CLEARLY_OFF: Final = ("too_little", "too_much")
+_CLEARLY_UNLIKE: Final = ("front_higher", "rear_higher")

@@ -131,7 +131,7 @@ def ride(bumps: Bumps, speed: Measured, end: End) -> Passage:
 
     Raises:
         InvalidInputError: a quantity isn't finite or is outside its range.
-        NoSolutionError: ``undamped_resonance``; ``too_uncertain`` if deviations reach zero.
+        NoSolutionError: ``too_uncertain`` if deviations reach zero or below.
     """
 
     def motion(*drawn: Quantity) -> tuple[Quantity, ...]:
