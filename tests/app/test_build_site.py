@@ -3,6 +3,7 @@
 These build the real thing from the pinned wheels, which are downloaded the first time.
 """
 
+import ast
 import io
 import json
 import re
@@ -19,7 +20,7 @@ from PIL import Image
 from mobileapp.pwa import kept
 from mobileapp.pwa.build import make_site
 from mobileapp.pwa.bytecode import RUNNER
-from mobileapp.pwa.carried import module_name
+from mobileapp.pwa.carried import module_name, package_file_is_carried
 from mobileapp.pwa.compress import compressed
 from mobileapp.pwa.files import write_tree
 from mobileapp.pwa.icon_names import CLIENT_ICONS, keep_used_icons, used_icons
@@ -168,6 +169,19 @@ def test_every_carried_module_imports_in_the_browsers_python(inside, tmp_path):
     )
     assert done.returncode == 0, done.stderr[-400:]
     assert (tmp_path / "stage" / "failed").read_text() == "{}"
+
+
+def test_our_code_reaches_for_nothing_that_numpy_left_at_home():
+    reached = {
+        f"numpy.{node.attr}"
+        for content in app_sources().values()
+        for node in ast.walk(ast.parse(content))
+        if isinstance(node, ast.Attribute) and getattr(node.value, "id", "") in {"np", "numpy"}
+    }
+    assert "numpy.array" in reached
+    assert [
+        name for name in reached if not package_file_is_carried(f"{name.replace('.', '/')}.py")
+    ] == []
 
 
 def test_the_same_inputs_give_the_same_bytes(site, monkeypatch, tmp_path):
