@@ -46,7 +46,7 @@ def test_pressure_falls_with_altitude(altitude, step):
 
 
 def test_gas_constant_is_that_of_air():
-    # Molar mass of ISO 2533. Its molar gas constant, 8.31432, is older and 17 ppm less than CODATA's.
+    # Molar mass of ISO 2533. Its molar gas constant, 8.31432, is 17 ppm less than today's.
     assert_allclose(AIR_GAS_CONSTANT, constants.R / 28.964420e-3, rtol=2e-5)
 
 
