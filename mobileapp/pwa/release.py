@@ -14,6 +14,7 @@ something does. The page's files may hold these placeholders:
 
     {{release}}     the id
     {{version}}     the version of the project
+    {{policy}}      the Content-Security-Policy
     {{files}}       JSON list of what the service worker keeps, each
                     {"path", "bytes", "integrity": "sha256-…", "engine": "chromium"|"other"|null};
                     a browser takes what is for its own engine or for none in particular
@@ -29,6 +30,7 @@ from collections.abc import Mapping
 from hashlib import sha256
 
 from mobileapp.pwa.client import ENGINES
+from mobileapp.pwa.policy import CONTENT_SECURITY_POLICY
 
 WORKER = "sw.js"
 LIST = "release.json"
@@ -54,7 +56,11 @@ def assemble(
         sources: fingerprint of the sources.
     """
     release = _release_id({**root, **{f"r/{path}": content for path, content in inside.items()}})
-    values = {"{{release}}": release, "{{version}}": version}
+    values = {
+        "{{release}}": release,
+        "{{version}}": version,
+        "{{policy}}": CONTENT_SECURITY_POLICY,
+    }
     site = {path: _fill(path, content, values) for path, content in root.items()}
     site |= {f"r/{release}/{path}": _fill(path, raw, values) for path, raw in inside.items()}
     worker = site.pop(WORKER)

@@ -1,0 +1,48 @@
+// The Python worker, and the line between it and Flet's client.
+//
+// The worker starts with the page, long before the client asks for it. What Python sends until
+// then waits here. Two kinds of messages travel: the client's packets, which are byte arrays, and
+// ours, which are objects {kind, …}.
+
+const worker = new Worker(new URL("worker.js", import.meta.url), { type: "module" });
+worker.postMessage({ kind: "start", documentUrl: document.URL });
+
+const listeners = new Map();
+const early = [];
+let toClient;
+let pythonIsReady;
+const ready = new Promise((resolve) => (pythonIsReady = resolve));
+
+worker.onmessage = ({ data }) => {
+  if (data.kind === undefined) {
+    if (toClient) toClient(data);
+    else early.push(data);
+  } else if (data.kind === "ready") {
+    pythonIsReady();
+  } else {
+    listeners.get(data.kind)?.(data);
+  }
+};
+
+/** Call `listener` with each of the worker's messages of a kind. */
+export function onPython(kind, listener) {
+  listeners.set(kind, listener);
+}
+
+/** Call `listener` when the worker itself can't run. */
+export function onWorkerError(listener) {
+  worker.onerror = listener;
+}
+
+export function toPython(message) {
+  worker.postMessage(message);
+}
+
+// What Flet's client calls, by these names: once to connect, then for each packet.
+globalThis.jsConnect = async (_app, _args, onPacket) => {
+  toClient = onPacket;
+  await ready;
+  early.splice(0).forEach(onPacket);
+};
+globalThis.jsSend = async (_app, packet) => worker.postMessage(packet, [packet.buffer]);
+globalThis.jsDisconnect = async () => {};

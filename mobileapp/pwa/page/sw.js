@@ -1,0 +1,116 @@
+// Keeps one release of the app on the device, whole, and serves only that.
+//
+// Install fetches every file of the list and lets the browser check it against its hash; one bad
+// file and nothing is installed. What has arrived stays in the release's cache, so that the next
+// attempt goes on from there. A new release waits until the person asks for it. Activation deletes
+// all other releases.
+
+const RELEASE = "{{release}}";
+const CACHE = `release-${RELEASE}`;
+const LIST = "kept-files"; // a cache entry: what the release consists of, for its successor
+
+// Which of two variants of the renderer the client will ask for; client.js decides likewise.
+const ENGINE = "v8BreakIterator" in Intl ? "chromium" : "other";
+const FILES = {{files}}.filter(({ engine }) => engine === null || engine === ENGINE);
+
+const address = (path) => new URL(path, self.registration.scope).href;
+const byAddress = new Map(FILES.map((file) => [address(file.path), file]));
+const TOTAL = FILES.reduce((sum, file) => sum + file.bytes, 0);
+
+self.addEventListener("install", (event) => event.waitUntil(keepAll()));
+self.addEventListener("activate", (event) => event.waitUntil(dropOthers()));
+self.addEventListener("fetch", (event) => event.respondWith(answer(event.request)));
+self.addEventListener("message", (event) => {
+  if (event.data.kind === "take over") self.skipWaiting();
+  if (event.data.kind === "complete?") event.waitUntil(keepAll().catch(() => {}));
+});
+
+/** Bring the cache to hold every file of the list, telling all pages how far it is. */
+async function keepAll() {
+  const cache = await caches.open(CACHE);
+  const present = new Set((await cache.keys()).map((request) => request.url));
+  const earlier = await earlierFiles();
+  let done = 0;
+  try {
+    for (const file of FILES) {
+      const url = address(file.path);
+      if (!present.has(url)) await cache.put(url, await obtain(file, url, earlier));
+      done += file.bytes;
+      await tell({ kind: "keeping", done, total: TOTAL });
+    }
+    await cache.put(address(LIST), Response.json(FILES));
+    await tell({ kind: "kept" });
+  } catch (error) {
+    await tell({ kind: "not kept", full: error.name === "QuotaExceededError", done, total: TOTAL });
+    throw error;
+  }
+}
+
+/** A file's response: from an earlier release where that had the same bytes, else fetched. */
+async function obtain(file, url, earlier) {
+  const known = await earlier.get(file.integrity)?.();
+  if (known) {
+    // A response remembers its address, and scripts import relative to it: give it a new one.
+    return new Response(await known.blob(), { headers: known.headers });
+  }
+  // Below r/ an address never changes its content, so what the page has just loaded may be used.
+  const cache = file.path.startsWith("r/") ? "default" : "no-cache";
+  const response = await fetch(url, { integrity: file.integrity, cache });
+  if (!response.ok) throw new Error(`${file.path}: ${response.status}`);
+  return response;
+}
+
+/** Where to find a file of an earlier, complete release, by its hash. */
+async function earlierFiles() {
+  const found = new Map();
+  for (const name of await caches.keys()) {
+    if (name === CACHE || !name.startsWith("release-")) continue;
+    const cache = await caches.open(name);
+    const list = await cache.match(address(LIST));
+    for (const { path, integrity } of list ? await list.json() : []) {
+      found.set(integrity, () => cache.match(address(path)));
+    }
+  }
+  return found;
+}
+
+async function dropOthers() {
+  for (const name of await caches.keys()) {
+    if (name !== CACHE && name.startsWith("release-")) await caches.delete(name);
+  }
+}
+
+async function answer(request) {
+  const url = new URL(request.url);
+  if (url.origin !== location.origin) return Response.error();
+  const wanted = request.mode === "navigate" && isApp(url) ? address("index.html") : url.href;
+  const cache = await caches.open(CACHE);
+  const kept = await cache.match(wanted, { ignoreSearch: true });
+  if (kept) return kept;
+  // Reached when the browser has thrown the cache away, and for the few files that aren't kept.
+  try {
+    return await fetch(request);
+  } catch {
+    return request.mode === "navigate" ? gone() : Response.error();
+  }
+}
+
+/** Whether an address is the app itself, not another document such as the licence notices. */
+function isApp(url) {
+  return url.href.split(/[?#]/)[0] === self.registration.scope || !byAddress.has(url.href);
+}
+
+function gone() {
+  const sentence =
+    "This browser has deleted the app's files. Open this page once with a connection to load " +
+    "them again. What you saved is kept apart from them.";
+  return new Response(`<!doctype html><meta name="viewport" content="width=device-width"><p>${sentence}`, {
+    status: 503,
+    headers: { "Content-Type": "text/html; charset=utf-8" },
+  });
+}
+
+async function tell(message) {
+  const pages = await self.clients.matchAll({ includeUncontrolled: true, type: "window" });
+  for (const page of pages) page.postMessage({ ...message, release: RELEASE });
+}

@@ -1,0 +1,87 @@
+// The Python worker: the interpreter, our packs of compiled modules, and the app's main function.
+//
+// Nothing is installed or compiled here. The packs' format is told in pwa/pack.py.
+
+import { loadPyodide } from "./python/pyodide.mjs";
+
+const here = (path) => new URL(path, import.meta.url);
+const tell = (message) => self.postMessage(message);
+
+// Everything Python needs from the page, importable there as `page_bridge`; see browser.py.
+let toApp = () => {};
+let lateStarted;
+const bridge = {
+  post: (kind, value) => tell({ kind, ...value }),
+  listen: (callback) => (toApp = callback),
+  late: () => (lateStarted ??= load("late.pack").then(unpack)),
+};
+
+// Under this name Flet's own connection leaves its functions for us to call.
+const flet = {};
+const early = [];
+
+self.onmessage = ({ data }) => {
+  if (data.kind === "start") {
+    flet.documentUrl = data.documentUrl;
+    start().catch(explain);
+  } else if (data.kind !== undefined) {
+    toApp(JSON.stringify(data));
+  } else if (flet.send) {
+    flet.send(data);
+  } else {
+    early.push(data);
+  }
+};
+
+new PerformanceObserver((list) => {
+  const bytes = list.getEntries().reduce((sum, entry) => sum + entry.decodedBodySize, 0);
+  tell({ kind: "loaded", bytes });
+}).observe({ type: "resource", buffered: true });
+
+let pyodide;
+
+async function start() {
+  const pack = load("app.pack");
+  pyodide = await loadPyodide({
+    indexURL: here("python/").href,
+    stdout: (line) => console.log(line),
+    stderr: (line) => console.error(line),
+  });
+  pyodide.registerJsModule("flet_js", flet);
+  pyodide.registerJsModule("page_bridge", bridge);
+  unpack(await pack);
+  pyodide.runPython("import flet; from mobileapp.main import main; flet.run(main)");
+  await flet.start_connection((packet) => {
+    const bytes = packet.toJs();
+    self.postMessage(bytes, [bytes.buffer]);
+  });
+  early.splice(0).forEach((packet) => flet.send(packet));
+  tell({ kind: "ready" });
+}
+
+async function load(name) {
+  const response = await fetch(here(name));
+  if (!response.ok) throw new Error(`${name}: ${response.status}`);
+  return new Uint8Array(await response.arrayBuffer());
+}
+
+function unpack(pack) {
+  const length = new DataView(pack.buffer).getUint32(0, true);
+  const { root, files } = JSON.parse(new TextDecoder().decode(pack.subarray(4, 4 + length)));
+  const made = new Set();
+  let from = 4 + length;
+  for (const [path, size] of files) {
+    const target = `${root}/${path}`;
+    const folder = target.slice(0, target.lastIndexOf("/"));
+    if (!made.has(folder)) pyodide.FS.mkdirTree(folder);
+    made.add(folder);
+    pyodide.FS.writeFile(target, pack.subarray(from, from + size), { canOwn: true });
+    from += size;
+  }
+  // Python has looked into these folders before they were filled.
+  pyodide.runPython("import sys; sys.path_importer_cache.clear()");
+}
+
+function explain(error) {
+  tell({ kind: "failed", what: "Python did not start.", details: String(error).slice(0, 2000) });
+}
