@@ -96,7 +96,7 @@ def clicks_for_damping(
     tried = sorted((first.clicks, second.clicks))
     span = LARGEST_STEP * abs(apart)
     notes = []
-    goal = fitting.value
+    goal: float = round(fitting.value)
     if not tried[0] - span <= goal <= tried[1] + span:
         notes.append(Note("clicks_step"))
         goal = min(max(goal, tried[0] - span), tried[1] + span)

@@ -322,6 +322,6 @@ def _ratio_and_damping(
     """Return r and 2 ζ r after checking that the response is finite."""
     frequency_ratio = positive("frequency_ratio", frequency_ratio)
     damping_ratio = not_negative("damping_ratio", damping_ratio)
-    bounded = np.not_equal(frequency_ratio, 1.0) | np.greater(damping_ratio, 0.0)
+    bounded = np.not_equal(frequency_ratio, 1.0) | np.greater(damping_ratio, SMALLEST)
     require(bounded, "undamped_resonance", "damping_ratio", NoSolutionError)
     return frequency_ratio, 2.0 * damping_ratio * frequency_ratio

@@ -172,9 +172,10 @@ def test_slow_waves_pass_unchanged_and_hardly_move_the_suspension(damping_ratio)
 
 
 @pytest.mark.parametrize("function", [transmissibility, stroke_ratio])
-def test_undamped_resonance_has_no_answer(function):
+@pytest.mark.parametrize("damping_ratio", [0.0, 1e-300])
+def test_undamped_resonance_has_no_answer(function, damping_ratio):
     with pytest.raises(NoSolutionError) as caught:
-        function(np.array([0.5, 1.0, 2.0]), 0.0)
+        function(np.array([0.5, 1.0, 2.0]), damping_ratio)
     assert caught.value.code == "undamped_resonance"
     assert caught.value.where.tolist() == [False, True, False]
 

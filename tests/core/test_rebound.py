@@ -74,20 +74,21 @@ def test_crossing_and_damping_are_inverse(frequency, damping_ratio):
     assert_allclose(damping_from_crossing(time * (1 + 1e-12), frequency), damping_ratio, atol=1e-10)
 
 
-@given(frequency=frequencies, damping_ratio=st.floats(0.01, 0.9), friction_share=frictions)
-def test_damping_from_a_release_with_friction(frequency, damping_ratio, friction_share):
+@given(frequency=frequencies, share=st.floats(0.02, 0.95), friction_share=frictions)
+def test_damping_from_a_release_with_friction(frequency, share, friction_share):
+    # Up to nearly the damping that would stop it at the mark.
+    damping_ratio = share * damping_from_phase(phase_range(friction_share)[1], friction_share)
     crossings, overshoot = release(frequency, damping_ratio, friction_share)
-    assume(overshoot > 1e-3)  # it must pass the mark, and not merely touch it
     assert_allclose(
         damping_from_crossing(crossings[0], frequency, friction_share), damping_ratio, atol=1e-6
     )
     assert_allclose(damping_from_release(1.0, overshoot, friction_share), damping_ratio, atol=1e-6)
 
 
-@given(phase=st.floats(1.6, 90.0), friction_share=frictions)
-def test_friction_looks_like_damping_unless_taken_out(phase, friction_share):
+@given(share=st.floats(0.0, 0.99), friction_share=frictions)
+def test_friction_looks_like_damping_unless_taken_out(share, friction_share):
     earliest, latest = phase_range(friction_share)
-    assume(earliest <= phase <= latest)
+    phase = earliest + round(share, 6) * (latest - earliest)
     assert damping_from_phase(phase, friction_share) <= damping_from_phase(phase) + 1e-12
 
 
