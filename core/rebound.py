@@ -18,7 +18,7 @@ mark that the swing is about by x_f towards the compressed side: friction looks 
 unless it is taken out.
 """
 
-from math import pi
+from math import inf, pi
 from typing import Final
 
 import numpy as np
@@ -252,12 +252,14 @@ def _crossing_angle(phase: FloatArray, dead_band: FloatArray, slowest: FloatArra
         low, high = np.where(passed, low, angle), np.where(passed, angle, high)
         slope = np.cos(phase * sine + angle) * (phase * cosine + 1.0)
         slope = slope + growth * (cosine - phase * sine**2)
-        proposed = angle - np.divide(miss, slope, out=np.zeros_like(miss), where=slope != 0.0)
+        proposed = angle - np.divide(miss, slope, out=np.full_like(miss, inf), where=slope != 0.0)
+        # A step within rounding may fall just out of the bracket: that is no reason to halve it.
+        solved = np.abs(proposed - angle) <= _ANGLE_TOLERANCE
+        if solved.all():
+            return angle
         inside = (low < proposed) & (proposed < high) & (step < _NEWTON_STEPS)
-        following = np.where(inside, proposed, low + (high - low) / 2.0)
-        if np.abs(following - angle).max() <= _ANGLE_TOLERANCE:
-            return following
-        angle = following
+        stepped = np.where(inside, proposed, low + (high - low) / 2.0)
+        angle = np.where(solved, angle, stepped)
     return angle
 
 
