@@ -99,6 +99,20 @@ MESSAGES: Final[dict[str, str]] = {
     "sag_band_order": "A sag target must run from a lower to a higher share of the travel.",
     # Atmosphere
     "altitude_range": "Altitude {altitude_m} is outside −500 to 11 000 m: check the unit.",
+    # Bounce test
+    "taps_not_increasing": "Taps must come in the order in which they were made.",
+    "too_many_taps": "A bounce test has at most 500 taps: start again.",
+    "taps_every": "Tap at every bottom or at every second one.",
+    "bounce_few_taps": "Tap at every bottom.",
+    "bounce_more_taps": "Steady so far: {more} more taps.",
+    "bounce_wide": "A few more taps make it sure.",
+    "bounce_unclear": "The beat count is unclear: tap each bottom, once.",
+    "bounce_restart": "There was a pause: counting from the restart.",
+    "bounce_done": "That is enough.",
+    "bounce_unsteady": "The taps have no steady rhythm: let the bike set it, then start again.",
+    "bounce_accidents": "Too many missed or doubled taps: start again, one tap a bottom.",
+    "bounce_frequency": "No bike bounces like that: tap at every bottom, and start again.",
+    "bounce_no_success": "Thirty taps and still unsure: rest, then start again.",
 }
 
 _SUFFIX_UNITS: Final = {

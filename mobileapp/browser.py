@@ -7,7 +7,9 @@ nothing, so no other module has to ask.
 import json
 from collections import deque
 from collections.abc import Callable
+from contextvars import copy_context
 from dataclasses import dataclass
+from functools import partial
 from importlib import import_module
 from typing import Any, Final, Literal
 
@@ -100,14 +102,14 @@ async def late_ready() -> None:
 def on_offline(listener: Callable[[Offline], None]) -> None:
     """Call `listener` whenever the keeping for offline use moves on; at once if it has."""
     global _offline_listener  # noqa: PLW0603 - one page, one listener
-    _offline_listener = listener
+    _offline_listener = _here(listener)
     _post("offline?")
 
 
 def on_update(listener: Callable[[], None]) -> None:
     """Call `listener` when a newer release is complete and waits; at once if one does."""
     global _update_listener  # noqa: PLW0603 - one page, one listener
-    _update_listener = listener
+    _update_listener = _here(listener)
     if _update_waits:
         listener()
 
@@ -127,6 +129,22 @@ def language() -> str:
     if _bridge is None:
         return "en"
     return str(import_module("js").navigator.language)[:2].lower()
+
+
+def _here(listener: Callable[..., None]) -> Callable[..., None]:
+    """Return a listener that runs in the caller's context; a message brings none of its own."""
+    return partial(copy_context().run, listener)
+
+
+def notices_address() -> str:
+    """Return where the licences of the software inside are, beside the worker's own script."""
+    if _bridge is None:
+        return ""
+    return str(import_module("js").URL.new("notices/index.html", _worker_address()).href)
+
+
+def _worker_address() -> str:
+    return str(import_module("js").location.href)
 
 
 def _post(kind: str, **value: object) -> None:

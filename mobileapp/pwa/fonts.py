@@ -1,6 +1,6 @@
 """The client's fonts: text, and only the icons in use.
 
-Our own fonts are `assets/fonts/*.ttf`; the app names them by `fonts/<file name>` in `page.fonts`.
+Our own fonts are `assets/fonts/*.ttf`; the app names them by their family.
 """
 
 import io
@@ -18,7 +18,7 @@ ICON_FONT = "fonts/MaterialIcons-Regular.otf"
 TEXT_FONT = "fonts/roboto.woff2"
 
 # What the client loads at start. Its own list also has formula fonts and a second icon set.
-FONT_MANIFEST = [
+_CLIENT_FONTS = [
     {"family": "MaterialIcons", "fonts": [{"asset": ICON_FONT}]},
     {"family": "Roboto", "fonts": [{"asset": TEXT_FONT}]},
 ]
@@ -26,7 +26,14 @@ FONT_MANIFEST = [
 
 def font_manifest() -> bytes:
     """Give the client's FontManifest.json."""
-    return json.dumps(FONT_MANIFEST).encode()
+    families: dict[str, list[dict[str, str | int]]] = {}
+    for path, content in own_fonts().items():
+        font = TTFont(io.BytesIO(content))
+        family = str(font["name"].getBestFamilyName())
+        weight = int(font["OS/2"].usWeightClass)
+        families.setdefault(family, []).append({"asset": path, "weight": weight})
+    ours = [{"family": family, "fonts": fonts} for family, fonts in families.items()]
+    return json.dumps(_CLIENT_FONTS + ours).encode()
 
 
 def icon_font(whole: bytes, used: Iterable[str]) -> bytes:

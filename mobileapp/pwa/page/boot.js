@@ -14,7 +14,10 @@ function fail(what, next, details) {
   keepOffline(); // a repaired release may be waiting
 }
 
-onWorkerError((event) => fail("Python did not start.", RELOAD, event.message));
+onWorkerError(({ message }) => {
+  // Later errors concern one action, not the app.
+  if (appState() === "starting") fail("Python did not start.", RELOAD, message);
+});
 onPython("failed", ({ what, next, details }) => fail(what, next ?? RELOAD, details));
 onPython("usable", async () => {
   // The packets of the first screen were posted before this message; two frames later it shows.

@@ -1,0 +1,32 @@
+"""Which address shows which screen."""
+
+import flet as ft
+
+from mobileapp.screens.about import AboutScreen
+from mobileapp.screens.bounce import BounceScreen
+from mobileapp.screens.home import HomeScreen
+from mobileapp.screens.sag import SagScreen
+from mobileapp.shared import StateContext
+from mobileapp.state import AppState
+
+
+@ft.component
+def App(state: AppState) -> ft.Control:
+    """The whole app: one view on top of another, as the address says."""
+    return StateContext(
+        state,
+        lambda: ft.Router(
+            [
+                ft.Route(
+                    component=HomeScreen,
+                    children=[
+                        ft.Route(path="about", component=AboutScreen),
+                        ft.Route(path="sag/:key", component=SagScreen),
+                        ft.Route(path="bounce/:key", component=BounceScreen),
+                    ],
+                )
+            ],
+            not_found=HomeScreen,
+            manage_views=True,
+        ),
+    )

@@ -1,0 +1,1 @@
+"""The building blocks of the screens."""

@@ -1,0 +1,69 @@
+"""What can be tapped."""
+
+from collections.abc import Callable
+
+import flet as ft
+
+from mobileapp import theme
+
+Handler = Callable[[], object]
+
+
+def main_action(
+    label: str, icon: ft.IconData, on_click: Handler, *, calls: bool = True
+) -> ft.Control:
+    """One of the few things a screen is for.
+
+    Args:
+        label: what it does.
+        icon: its sign.
+        on_click: does it.
+        calls: filled with the accent; at most one or two on a screen.
+    """
+    kind = ft.FilledButton if calls else ft.OutlinedButton
+    return kind(
+        content=label,
+        icon=icon,
+        on_click=on_click,
+        height=theme.MAIN_ACTION,
+        style=ft.ButtonStyle(
+            shape=ft.RoundedRectangleBorder(radius=theme.CORNER),
+            text_style=ft.TextStyle(size=theme.TITLE, weight=ft.FontWeight.BOLD),
+            icon_size=theme.TITLE + 6,
+            side=ft.BorderSide(2, theme.ACCENT),
+        ),
+    )
+
+
+def icon_action(
+    label: str, icon: ft.IconData, on_click: Handler, color: ft.ColorValue = theme.ACCENT
+) -> ft.Control:
+    """A sign alone; its label is for screen readers."""
+    return ft.Semantics(
+        label=label,
+        button=True,
+        container=True,
+        content=ft.IconButton(
+            icon,
+            on_click=on_click,
+            icon_color=color,
+            icon_size=theme.TITLE + 6,
+            width=theme.TOUCH,
+            height=theme.TOUCH,
+        ),
+    )
+
+
+def word_action(
+    label: str, on_click: Handler | None = None, *, url: str | None = None
+) -> ft.Control:
+    """A word that does something, or leads to another page."""
+    return ft.TextButton(
+        content=label,
+        on_click=on_click,
+        url=url,
+        height=theme.TOUCH,
+        style=ft.ButtonStyle(
+            text_style=ft.TextStyle(size=theme.BODY, weight=ft.FontWeight.BOLD), color=theme.ACCENT
+        ),
+    )

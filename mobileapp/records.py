@@ -1,0 +1,228 @@
+"""What is kept: setups with the readings they were made from, and their JSON form.
+
+Each record is one JSON object that names its format and kind. Values stay as they were typed,
+with their unit; results are computed again from them. A record of a newer format is refused
+and left as it is.
+"""
+
+import json
+import math
+import secrets
+from collections.abc import Mapping
+from dataclasses import dataclass, field, replace
+from datetime import UTC, datetime
+from typing import Any, Final, Literal
+
+from mobileapp.units import UNITS, Amount
+
+FORMAT: Final = 1
+KIND: Final = "setup"
+
+_LONGEST_RECORD: Final = 65_536  # [characters] a setup with 200 taps needs a tenth of it
+_MOST_TAPS: Final = 500
+_LONGEST_TEXT: Final = 200  # [characters]
+
+End = Literal["front", "rear"]
+ENDS: Final[tuple[End, End]] = ("front", "rear")
+Place = Literal["shaft", "wheel"]
+PLACES: Final[tuple[Place, Place]] = ("shaft", "wheel")
+
+
+class RecordError(ValueError):
+    """A text that isn't a record of ours, or one of a newer format.
+
+    Attributes:
+        code: key of the sentence in `mobileapp.texts`.
+    """
+
+    def __init__(self, code: str) -> None:
+        super().__init__(code)
+        self.code = code
+
+
+@dataclass(frozen=True)
+class SagReading:
+    """Sag as read at one end.
+
+    Attributes:
+        travel: full travel of where it was read: fork or shock stroke, or wheel travel.
+        sag: how far the loaded bike has sunk.
+        place: read at the shaft (fork stanchion, shock shaft) or at the wheel.
+        wheel_travel: of a rear reading at the shaft, the wheel's full travel, if known.
+    """
+
+    travel: Amount
+    sag: Amount
+    place: Place = "shaft"
+    wheel_travel: Amount | None = None
+
+    def at(self, place: Place) -> "SagReading":
+        """Return the same number, read at another place."""
+        if place == self.place:
+            return self
+        if place == "wheel":
+            return replace(self, place=place, travel=self.wheel_travel or self.travel)
+        stroke = FIRST_READINGS["rear"].travel
+        return replace(self, place=place, travel=stroke, wheel_travel=self.travel)
+
+
+# A first guess that a thumb can step away from: common sizes, no source.
+FIRST_READINGS: Final[dict[End, SagReading]] = {
+    "front": SagReading(Amount(150, "mm"), Amount(0, "mm")),
+    "rear": SagReading(Amount(55, "mm"), Amount(0, "mm"), "shaft", Amount(150, "mm")),
+}
+
+
+@dataclass(frozen=True)
+class BounceRun:
+    """One timed bounce test.
+
+    Attributes:
+        taps: times of the taps [s], from the first one.
+        taps_every: tapped at every bottom (1) or every second one (2).
+        page_clock: whether the browser's own event times were to be had.
+    """
+
+    taps: tuple[float, ...]
+    taps_every: int = 1
+    page_clock: bool = True
+
+
+@dataclass(frozen=True)
+class Setup:
+    """One bike set up for one person, as far as it got.
+
+    Attributes:
+        key: random, unique.
+        made: when it was begun, ISO 8601 with the offset from UTC.
+        label: what the person calls it.
+        sag: readings by end.
+        bounce: the last bounce test that was kept.
+        shown: the results as they were shown last, in words, for lists.
+    """
+
+    key: str
+    made: str
+    label: str = ""
+    sag: Mapping[End, SagReading] = field(default_factory=dict)
+    bounce: BounceRun | None = None
+    shown: tuple[str, ...] = ()
+
+    def reading(self, end: End) -> SagReading:
+        """Return the sag reading of an end, or the first guess to step away from."""
+        return self.sag.get(end, FIRST_READINGS[end])
+
+    def with_sag(self, end: End, reading: SagReading) -> "Setup":
+        """Return the setup with a reading replaced."""
+        return replace(self, sag={**self.sag, end: reading})
+
+
+def new_key() -> str:
+    """Return a random key."""
+    return secrets.token_hex(8)
+
+
+def new_setup(key: str | None = None) -> Setup:
+    """Begin a setup, now."""
+    return Setup(key or new_key(), datetime.now(UTC).astimezone().isoformat(timespec="seconds"))
+
+
+def to_json(setup: Setup) -> str:
+    """Return a setup as text."""
+    record: dict[str, Any] = {
+        "format": FORMAT,
+        "kind": KIND,
+        "key": setup.key,
+        "made": setup.made,
+        "label": setup.label,
+        "sag": {
+            end: {
+                "travel": _pair(reading.travel),
+                "sag": _pair(reading.sag),
+                "place": reading.place,
+                "wheel_travel": _pair(reading.wheel_travel),
+            }
+            for end, reading in setup.sag.items()
+        },
+        "shown": list(setup.shown),
+    }
+    if setup.bounce:
+        record["bounce"] = {
+            "taps": list(setup.bounce.taps),
+            "every": setup.bounce.taps_every,
+            "page_clock": setup.bounce.page_clock,
+        }
+    return json.dumps(record, ensure_ascii=False, separators=(",", ":"))
+
+
+def from_json(text: str) -> Setup:
+    """Return the setup that a text holds.
+
+    Raises:
+        RecordError: code ``record.damaged`` or ``record.newer``.
+    """
+    if len(text) > _LONGEST_RECORD:
+        raise RecordError("record.damaged")
+    try:
+        record = json.loads(text)
+        _check(record["format"] <= FORMAT, "record.newer")
+        return _setup(record)
+    except RecordError:
+        raise
+    except (ValueError, TypeError, KeyError, AttributeError, RecursionError) as error:
+        raise RecordError("record.damaged") from error
+
+
+def _pair(amount: Amount | None) -> list[float | str] | None:
+    return None if amount is None else [amount.value, amount.unit]
+
+
+def _setup(record: Mapping[str, Any]) -> Setup:
+    _check(record["kind"] == KIND and record["format"] >= 1)
+    datetime.fromisoformat(record["made"])
+    return Setup(
+        key=_text(record["key"]),
+        made=record["made"],
+        label=_text(record["label"]),
+        sag={end: _sag(record["sag"][end]) for end in ENDS if end in record["sag"]},
+        bounce=_bounce(record["bounce"]) if "bounce" in record else None,
+        shown=tuple(_text(line) for line in record["shown"]),
+    )
+
+
+def _sag(reading: Mapping[str, Any]) -> SagReading:
+    _check(reading["place"] in PLACES)
+    wheel_travel = reading["wheel_travel"]
+    return SagReading(
+        _amount(reading["travel"]),
+        _amount(reading["sag"]),
+        reading["place"],
+        None if wheel_travel is None else _amount(wheel_travel),
+    )
+
+
+def _bounce(run: Mapping[str, Any]) -> BounceRun:
+    taps = tuple(_number(tap) for tap in run["taps"])
+    _check(len(taps) <= _MOST_TAPS and run["every"] in (1, 2))
+    return BounceRun(taps, run["every"], bool(run["page_clock"]))
+
+
+def _amount(pair: Any) -> Amount:  # noqa: ANN401 - straight from JSON
+    value, unit = pair
+    _check(unit in UNITS)
+    return Amount(_number(value), unit)
+
+
+def _number(value: Any) -> float:  # noqa: ANN401 - straight from JSON
+    _check(isinstance(value, int | float) and not isinstance(value, bool) and math.isfinite(value))
+    return float(value)
+
+
+def _text(value: Any) -> str:  # noqa: ANN401 - straight from JSON
+    _check(isinstance(value, str) and len(value) <= _LONGEST_TEXT)
+    return str(value)
+
+
+def _check(valid: bool, code: str = "record.damaged") -> None:  # noqa: FBT001 - reads as a sentence
+    if not valid:
+        raise RecordError(code)

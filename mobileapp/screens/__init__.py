@@ -1,0 +1,1 @@
+"""One screen a file. A screen shows and asks; it calculates nothing."""

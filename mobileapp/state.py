@@ -1,0 +1,175 @@
+"""What the app knows while it runs, and how it is kept.
+
+Screens read this and call its methods; they re-render when something in it is replaced. Every
+change of a setup is written to the device at once, in the background, one after the other.
+"""
+
+import asyncio
+from dataclasses import dataclass, field, replace
+from typing import TYPE_CHECKING, Final
+
+import flet as ft
+
+from mobileapp import browser
+from mobileapp.records import (
+    BounceRun,
+    End,
+    Place,
+    RecordError,
+    SagReading,
+    Setup,
+    from_json,
+    new_setup,
+    to_json,
+)
+from mobileapp.store import Store, StoreError, open_store
+from mobileapp.texts import Texts
+from mobileapp.units import SYSTEMS, Amount
+
+if TYPE_CHECKING:  # they need numpy, which arrives after the first paint
+    from mobileapp.results.bounce import BounceView
+    from mobileapp.results.sag import SagView
+
+RECORD_PREFIX: Final = "setup/"
+
+
+@ft.observable
+@dataclass
+class AppState:
+    """The running app.
+
+    Attributes:
+        texts: the words of the person's language.
+        units: unit symbols by quantity.
+        setups: newest first.
+        offline: whether the app starts without a network.
+        update_waits: whether a newer release can take over.
+        calculator: whether numpy is there.
+        trouble: keys of sentences about records and saving that a person must see.
+        deleted: the setup deleted last, while it can be brought back.
+    """
+
+    texts: Texts = field(default_factory=lambda: Texts(browser.language()))
+    units: dict[str, str] = field(default_factory=lambda: dict(SYSTEMS["mixed"]))
+    setups: tuple[Setup, ...] = ()
+    offline: browser.Offline = field(default_factory=browser.Offline)
+    update_waits: bool = False
+    calculator: bool = False
+    trouble: tuple[str, ...] = ()
+    deleted: Setup | None = None
+
+    async def start(self) -> None:
+        """Open the store and read what is in it."""
+        self._unsaved: dict[str, str | None] = {}
+        self._writing: asyncio.Task[None] | None = None
+        self._store: Store | None = None
+        try:
+            self._store = await open_store()
+            texts = await self._store.read_all()
+        except StoreError as error:
+            self._report(error.code)
+            return
+        setups = []
+        for key, text in texts.items():
+            if key.startswith(RECORD_PREFIX):
+                try:
+                    setups.append(from_json(text))
+                except RecordError as error:
+                    self._report(error.code)
+        self.setups = tuple(sorted(setups, key=lambda setup: setup.made, reverse=True))
+
+    async def follow_page(self) -> None:
+        """Hear of offline use and updates, and get the calculator."""
+        browser.on_offline(lambda offline: setattr(self, "offline", offline))
+        browser.on_update(lambda: setattr(self, "update_waits", True))
+        await browser.late_ready()
+        self.calculator = True
+        for setup in self.setups:
+            if not setup.shown:  # edited before the calculator was there
+                self.save(setup)
+
+    def setup(self, key: str) -> Setup:
+        """Return the setup of a key, a new one if it isn't kept yet."""
+        return next((setup for setup in self.setups if setup.key == key), None) or new_setup(key)
+
+    def reading(self, key: str, end: End) -> SagReading:
+        """Return the sag reading of an end, or the first guess to step away from."""
+        return self.setup(key).reading(end)
+
+    def sag_view(self, key: str, end: End) -> "SagView | None":
+        """Return what to show for a reading; None while there is nothing to calculate."""
+        setup = self.setup(key)
+        if not self.calculator or end not in setup.sag:
+            return None
+        from mobileapp.results.sag import sag_view  # noqa: PLC0415 - numpy comes late
+
+        return sag_view(end, setup.sag[end], self.texts)
+
+    def bounce_view(self, run: BounceRun) -> "BounceView | None":
+        """Return what to show for the taps so far; None while the calculator isn't there."""
+        if not self.calculator:
+            return None
+        from mobileapp.results.bounce import bounce_view  # noqa: PLC0415 - numpy comes late
+
+        return bounce_view(run, self.texts)
+
+    def save_reading(self, key: str, end: End, **changes: Amount) -> None:
+        """Change values of a reading, and keep it."""
+        self.save(self.setup(key).with_sag(end, replace(self.reading(key, end), **changes)))
+
+    def save_place(self, key: str, place: Place) -> None:
+        """Change where the rear was read."""
+        self.save(self.setup(key).with_sag("rear", self.reading(key, "rear").at(place)))
+
+    def save_bounce(self, key: str, run: BounceRun | None) -> None:
+        """Keep a bounce test with its setup; None takes it away."""
+        self.save(replace(self.setup(key), bounce=run))
+
+    def save(self, setup: Setup) -> None:
+        """Replace or add a setup, and keep it."""
+        setup = self._summarised(setup)
+        others = tuple(other for other in self.setups if other.key != setup.key)
+        self.setups = tuple(sorted((setup, *others), key=lambda kept: kept.made, reverse=True))
+        self._write(setup.key, to_json(setup))
+
+    def delete(self, key: str) -> None:
+        """Take a setup away; `undelete` brings it back."""
+        self.deleted = self.setup(key)
+        self.setups = tuple(setup for setup in self.setups if setup.key != key)
+        self._write(key, None)
+
+    def undelete(self) -> None:
+        """Bring the setup deleted last back."""
+        if self.deleted:
+            self.save(self.deleted)
+            self.deleted = None
+
+    def _summarised(self, setup: Setup) -> Setup:
+        if not self.calculator:
+            return setup
+        from mobileapp.results.summary import summary  # noqa: PLC0415 - numpy comes late
+
+        return replace(setup, shown=summary(setup, self.texts))
+
+    def _write(self, key: str, text: str | None) -> None:
+        self._unsaved[RECORD_PREFIX + key] = text
+        if self._writing is None or self._writing.done():
+            self._writing = asyncio.create_task(self._write_all())
+
+    async def _write_all(self) -> None:
+        while self._unsaved and self._store:
+            key, text = next(iter(self._unsaved.items()))
+            try:
+                if text is None:
+                    await self._store.remove(key)
+                else:
+                    await self._store.put(key, text)
+            except StoreError as error:
+                self._report(error.code)
+                return
+            if self._unsaved.get(key) == text:
+                del self._unsaved[key]
+
+    def _report(self, code: str) -> None:
+        if code not in self.trouble:
+            self.trouble = (*self.trouble, code)

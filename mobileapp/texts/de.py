@@ -1,0 +1,128 @@
+"""German."""
+
+from typing import Final
+
+TEXTS: Final = {
+    "app.name": "Sag & Bounce",
+    "app.loading": "Der Rechner macht sich bereit …",
+    "back": "Zurück",
+    "undo": "Rückgängig",
+    "more": "mehr",
+    "less": "weniger",
+    "type": "{name} eintippen",
+    "ok": "OK",
+    "cancel": "Abbrechen",
+    "stepper.more": "{name}: mehr",
+    "stepper.less": "{name}: weniger",
+    "input.not_a_number": "Das ist keine Zahl. Tippe Ziffern, etwa 27,5.",
+    "offline.ready": "Offline bereit",
+    "offline.preparing": (
+        "Die App wird auf diesem Gerät abgelegt: {done} von {total} MB. Bleib im Netz."
+    ),
+    "offline.starting": "Die App wird auf diesem Gerät abgelegt. Bleib im Netz.",
+    "offline.insecure": (
+        "Unter dieser Adresse geht es nicht offline: Browser erlauben das nur mit https:// "
+        "oder auf localhost."
+    ),
+    "offline.unsupported": (
+        "Dieser Browser kann die App hier nicht offline behalten. Vielleicht ist es ein "
+        "privates Fenster."
+    ),
+    "offline.full": "Nicht offline bereit: Das Gerät ist voll. Schaff Platz und lade neu.",
+    "offline.network": (
+        "Nicht offline bereit: Die Verbindung riss ab. Neu laden setzt dort fort, wo es aufhörte."
+    ),
+    "offline.error": (
+        "Nicht offline bereit: Der Browser weigert sich. Lade neu, oder nimm einen anderen."
+    ),
+    "update.waits": "Eine neue Version ist da.",
+    "update.apply": "Aktualisieren",
+    "record.damaged": (
+        "Ein gespeichertes Setup ist beschädigt und nicht lesbar. Es blieb, wie es ist."
+    ),
+    "record.newer": (
+        "Ein gespeichertes Setup stammt von einer neueren Version der App. Es blieb, wie es ist."
+    ),
+    "store.full": (
+        "Nicht gespeichert: Das Gerät ist voll. Schaff Platz, dann ändere einen Wert noch einmal."
+    ),
+    "store.failed": (
+        "Nicht gespeichert: Der Browser weigert sich. Notiere die Werte, dann lade neu."
+    ),
+    "home.title": "Sag & Bounce",
+    "home.sag": "Sag messen",
+    "home.bounce": "Wippen stoppen",
+    "home.saved": "Gespeicherte Setups",
+    "home.none": "Noch nichts gespeichert. Jede Ablesung wird sofort gesichert.",
+    "home.open": "{label} öffnen",
+    "home.delete": "{label} löschen",
+    "home.deleted": "„{label}“ gelöscht",
+    "home.about": "Über die App, Vorsicht",
+    "setup.unnamed": "Setup vom {when}",
+    "sag.title": "Sag",
+    "sag.front": "Vorn",
+    "sag.rear": "Hinten",
+    "sag.travel.fork": "Federweg der Gabel",
+    "sag.travel.shaft": "Hub des Dämpfers",
+    "sag.travel.wheel": "Federweg am Rad",
+    "sag.reading": "Sag abgelesen",
+    "sag.place": "Abgelesen",
+    "sag.place.shaft": "am Dämpfer",
+    "sag.place.wheel": "am Rad",
+    "sag.wheel_travel": "Federweg am Rad",
+    "sag.how": (
+        "Volle Ausrüstung, Fahrhaltung, Bremsen offen. O-Ring an die Dichtung schieben, sanft "
+        "einsinken, absteigen, ablesen, wie weit der O-Ring gewandert ist."
+    ),
+    "sag.frequency": "Wippt mit etwa",
+    "sag.frequency.unknown": "Mit dem Federweg am Rad zeigt sich die Frequenz dazu.",
+    "sag.band": "üblich {low} bis {high} %",
+    "sag.band.within": "im üblichen Bereich, {low} bis {high} %",
+    "sag.band.below": "unter den üblichen {low} bis {high} %: straffer als die meisten fahren",
+    "sag.band.above": "über den üblichen {low} bis {high} %: weicher als die meisten fahren",
+    "sag.band.open": "etwa am Rand der üblichen {low} bis {high} %; lies noch einmal ab",
+    "sag.maker": "Allgemeine Praxis; die Angabe des Herstellers geht vor.",
+    "sag.error.travel": "Der Federweg muss größer als null sein.",
+    "sag.error.zero": "Noch kein Sag. Stell ein, wie weit der O-Ring gewandert ist.",
+    "sag.error.negative": "Sag kann nicht unter null liegen.",
+    "sag.error.beyond": (
+        "Sag kann den vollen Federweg von {travel} nicht erreichen. Stimmt der Federweg? "
+        "Dämpfer oder Rad?"
+    ),
+    "sag.unusual": "Außerhalb dessen, was gefahren wird; prüfe Einheit und Ablesestelle.",
+    "sag.gauge": "{end}: Sag {percent}. {band}",
+    "sag.next": "Wippen stoppen",
+    "bounce.title": "Wippen",
+    "bounce.pad": "Tippe an jedem tiefsten Punkt",
+    "bounce.pad.first": "Jemand hält das Rad, der Fahrer wippt und überlässt dem Rad den "
+    "Rhythmus. Tippe hier jedes Mal, wenn es am tiefsten ist.",
+    "bounce.again": "Neu anfangen",
+    "bounce.finish": "Fertig",
+    "bounce.taps": "{count} Tipper",
+    "bounce.keep_going": "Weiter so",
+    "bounce.done": "Fertig. Gespeichert.",
+    "bounce.start_again": "Neu anfangen",
+    "bounce.beats": "{used} verwendet, {missed} verpasst, {doubled} doppelt",
+    "bounce.no_clock": "Der Browser nennt hier keine genauen Zeiten, das ± ist darum weiter.",
+    "bounce.rhythm": (
+        "Das ist der Rhythmus des Fahrers. Er kann bis zu ein Zehntel neben dem des Rads liegen."
+    ),
+    "about.title": "Über die App, Vorsicht",
+    "about.cautions": "Vorsicht",
+    "about.caution.pressure": "Nie über den Druck gehen, der auf dem Bauteil steht.",
+    "about.caution.air": "Alle Luft ablassen, bevor etwas geöffnet wird.",
+    "about.caution.manual": (
+        "Die Anleitung des Herstellers und örtliche Regeln gehen dem vor, was diese App sagt."
+    ),
+    "about.caution.damage": (
+        "Ein undichtes, klopfendes oder beschädigtes Bauteil oder ein verzogener Rahmen gehört "
+        "in eine Fachwerkstatt und wird nicht gefahren."
+    ),
+    "about.caution.test": (
+        "Wippen nur auf ebenem Boden, jemand hält das Rad. Für den Sag: volle Ausrüstung, "
+        "Bremsen offen."
+    ),
+    "about.caution.ride": "Erste Fahrt nach einer Änderung: langsam und auf leichtem Grund.",
+    "about.privacy": "Nichts, was du eingibst, verlässt dieses Gerät.",
+    "about.notices": "Lizenzen der enthaltenen Software",
+}

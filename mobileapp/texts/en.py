@@ -1,0 +1,114 @@
+"""English."""
+
+from typing import Final
+
+TEXTS: Final = {
+    "app.name": "Sag & Bounce",
+    "app.loading": "Getting the calculator ready …",
+    "back": "Back",
+    "undo": "Undo",
+    "more": "more",
+    "less": "less",
+    "type": "Type {name}",
+    "ok": "OK",
+    "cancel": "Cancel",
+    "stepper.more": "{name}: more",
+    "stepper.less": "{name}: less",
+    "input.not_a_number": "That isn't a number. Type digits, like 27.5.",
+    # Whether it can be used without signal
+    "offline.ready": "Ready offline",
+    "offline.preparing": "Keeping the app on this device: {done} of {total} MB. Stay connected.",
+    "offline.starting": "Keeping the app on this device. Stay connected.",
+    "offline.insecure": (
+        "This address can't work offline: browsers allow it only on https:// or localhost."
+    ),
+    "offline.unsupported": (
+        "This browser can't keep the app for offline use here. A private window may be the reason."
+    ),
+    "offline.full": "Not ready offline: this device is full. Free some space, then reload.",
+    "offline.network": "Not ready offline: the connection broke. Reload to go on where it stopped.",
+    "offline.error": "Not ready offline: the browser refused. Reload, or try another browser.",
+    "update.waits": "A new version is ready.",
+    "update.apply": "Update",
+    # What is kept
+    "record.damaged": "One saved setup is damaged and can't be read. It was left as it is.",
+    "record.newer": "One saved setup is from a newer version of the app. It was left as it is.",
+    "store.full": "Not saved: this device is full. Free some space, then change a value again.",
+    "store.failed": "Not saved: the browser refused. Note the values, then reload the page.",
+    # Home
+    "home.title": "Sag & Bounce",
+    "home.sag": "Measure sag",
+    "home.bounce": "Time a bounce",
+    "home.saved": "Saved setups",
+    "home.none": "Nothing saved yet. Each reading is saved as you make it.",
+    "home.open": "Open {label}",
+    "home.delete": "Delete {label}",
+    "home.deleted": "Deleted “{label}”",
+    "home.about": "About and cautions",
+    "setup.unnamed": "Setup of {when}",
+    # Sag
+    "sag.title": "Sag",
+    "sag.front": "Front",
+    "sag.rear": "Rear",
+    "sag.travel.fork": "Fork travel",
+    "sag.travel.shaft": "Shock stroke",
+    "sag.travel.wheel": "Wheel travel",
+    "sag.reading": "Sag reading",
+    "sag.place": "Read at",
+    "sag.place.shaft": "the shock",
+    "sag.place.wheel": "the wheel",
+    "sag.wheel_travel": "Wheel travel",
+    "sag.how": (
+        "Full kit, riding stance, brakes off. Push the O-ring to the seal, settle in gently, "
+        "step off, read how far the O-ring moved."
+    ),
+    "sag.frequency": "Bounces at about",
+    "sag.frequency.unknown": "Set the wheel travel to see the frequency that follows.",
+    "sag.band": "usual {low} to {high} %",
+    "sag.band.within": "inside the usual {low} to {high} %",
+    "sag.band.below": "below the usual {low} to {high} %: stiffer than most ride it",
+    "sag.band.above": "above the usual {low} to {high} %: softer than most ride it",
+    "sag.band.open": "about at the edge of the usual {low} to {high} %; read again to be sure",
+    "sag.maker": "Common practice; the maker's figure goes first.",
+    "sag.error.travel": "Travel must be more than zero.",
+    "sag.error.zero": "No sag yet. Set how far the O-ring moved.",
+    "sag.error.negative": "Sag can't be below zero.",
+    "sag.error.beyond": (
+        "Sag can't reach the full travel of {travel}. Is this the right travel? Shock or wheel?"
+    ),
+    "sag.unusual": "Outside what bikes are ridden with; check units and where it was read.",
+    "sag.gauge": "{end}: sag {percent}. {band}",
+    "sag.next": "Time a bounce",
+    # Bounce
+    "bounce.title": "Bounce",
+    "bounce.pad": "Tap at every bottom",
+    "bounce.pad.first": "Bike held, rider bounces and lets the bike set the rhythm. "
+    "Tap here each time the bike is at its lowest.",
+    "bounce.again": "Start again",
+    "bounce.finish": "Done",
+    "bounce.taps": "{count} taps",
+    "bounce.keep_going": "Keep going",
+    "bounce.done": "Done. Saved.",
+    "bounce.start_again": "Start again",
+    "bounce.beats": "{used} used, {missed} missed, {doubled} doubled",
+    "bounce.no_clock": "The browser gives no exact tap times here, so the ± is wider.",
+    "bounce.rhythm": (
+        "This is the rider's rhythm. A rider can keep one up to a tenth away from the bike's own."
+    ),
+    # About
+    "about.title": "About and cautions",
+    "about.cautions": "Cautions",
+    "about.caution.pressure": "Never exceed the pressure printed on the unit.",
+    "about.caution.air": "Release all air before opening anything.",
+    "about.caution.manual": "The maker's manual and local rules go before what this app says.",
+    "about.caution.damage": (
+        "A leaking, knocking or damaged unit, or a frame out of true, goes to a qualified "
+        "mechanic and is not ridden."
+    ),
+    "about.caution.test": (
+        "Bounce-test on level ground with someone holding the bike. For sag: full kit, brakes off."
+    ),
+    "about.caution.ride": "First ride after a change: slow, and on easy ground.",
+    "about.privacy": "Nothing you enter leaves this device.",
+    "about.notices": "Licences of the software inside",
+}

@@ -1,0 +1,1 @@
+"""Studies and benches that a person runs: ``python -m tests.bench.<name>``."""
