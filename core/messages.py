@@ -107,6 +107,7 @@ MESSAGES: Final[dict[str, str]] = {
     "bounce_more_taps": "Steady so far: {more} more taps.",
     "bounce_wide": "A few more taps make it sure.",
     "bounce_unclear": "The beat count is unclear: tap each bottom, once.",
+    "bounce_no_rhythm_yet": "The rhythm isn't clear yet: let the bike set it.",
     "bounce_restart": "There was a pause: counting from the restart.",
     "bounce_done": "That is enough.",
     "bounce_unsteady": "The taps have no steady rhythm: let the bike set it, then start again.",

@@ -22,6 +22,7 @@ MINIMUM_USED: Final = 8  # taps; with six, one result in a thousand was grossly 
 WANTED_HALF_WIDTH: Final = 0.03  # [-] of the frequency
 CLEAR_MARGIN: Final = 3.0  # [nats] e³ = 20 times likelier than any other numbering
 FREQUENCIES: Final = (0.8, 4.5)  # [Hz] no bike bounces slower, no finger follows faster
+CLEAR_RHYTHM: Final = 4.5  # [nats] lets at most one rhythmless series in fifty pass
 MOST_ACCIDENTS: Final = 0.4  # [-] of the beats
 UNSTEADY: Final = 0.15  # [-] of the period: standard deviation about the beat
 MOST_TAPS: Final = 30  # without success
@@ -71,7 +72,9 @@ class BounceEstimate:
         return str(self.note)
 
 
-def estimate_bounce(tap_times_s: Sequence[float] | FloatArray, taps_every: int = 1) -> BounceEstimate:
+def estimate_bounce(
+    tap_times_s: Sequence[float] | FloatArray, taps_every: int = 1
+) -> BounceEstimate:
     """Return the bounce frequency that a series of taps shows, and whether to go on tapping.
 
     The taps are freed of doubles within 0.15 s, cut at pauses (the longest part counts) and of
@@ -111,6 +114,7 @@ class _Series:
         self.beats: list[int | None] = [None] * len(times)
         self.missed = 0
         self.margin = 0.0
+        self.evidence = 0.0
         self.residuals = np.zeros(0)
         self.after_pause = False
         self.counted = self._without_pauses(self._without_early_doubles())
@@ -149,6 +153,7 @@ class _Series:
         counted = self.counted[WARM_UP:]
         numbering = number_beats(self.times[counted])
         self.margin = numbering.margin
+        self.evidence = numbering.evidence
         self.set_roles(counted[~numbering.kept], "doubled")
         taps, beats = counted[numbering.kept], numbering.beats[numbering.kept]
         inside, self.residuals = _inside(beats.astype(float), self.times[taps])
@@ -158,6 +163,10 @@ class _Series:
         for index, beat in zip(taps, beats, strict=True):
             self.beats[index] = int(beat)
         return measure_rhythm(beats.astype(float), self.times[taps])
+
+    def is_clear(self) -> bool:
+        """Return whether the numbering stands out from all others and from no rhythm."""
+        return self.margin >= CLEAR_MARGIN and self.evidence >= CLEAR_RHYTHM
 
     def count(self, role: Role) -> int:
         """Return how many taps have a role."""
@@ -196,26 +205,29 @@ def _judge(series: _Series, taps_every: int) -> BounceEstimate:
     enough = used >= MINIMUM_USED
     lowest, highest = FREQUENCIES
     frequency = taps_every / rhythm.period
+    wide = half_width >= WANTED_HALF_WIDTH
+    strange = not lowest <= frequency <= highest
+    unsteady = series.residuals.std() > UNSTEADY * rhythm.period
+    too_many = accidents > MOST_ACCIDENTS * (used + accidents)
+    unclear = series.margin < CLEAR_MARGIN
     # A result is shown once taps and numbering can carry it, whether or not it is final.
-    shown = rhythm if used >= MINIMUM_USED // 2 and series.margin >= CLEAR_MARGIN else None
-    if enough and series.residuals.std() > UNSTEADY * rhythm.period:
-        return series.result("start_again", "bounce_unsteady", None, taps_every)
-    if len(series.counted) >= MINIMUM_USED and accidents > MOST_ACCIDENTS * (used + accidents):
-        return series.result("start_again", "bounce_accidents", None, taps_every)
-    if enough and not lowest <= frequency <= highest:
-        return series.result("start_again", "bounce_frequency", None, taps_every)
-    if enough and half_width < WANTED_HALF_WIDTH and series.margin >= CLEAR_MARGIN:
-        return series.result("done", "bounce_done", rhythm, taps_every)
-    if len(series.times) >= MOST_TAPS:
-        return series.result("start_again", "bounce_no_success", None, taps_every)
-    if series.after_pause:
-        return series.result("keep_going", "bounce_restart", shown, taps_every)
-    if not enough:
-        more = float(MINIMUM_USED - used)
-        return series.result("keep_going", "bounce_more_taps", shown, taps_every, more=more)
-    if series.margin < CLEAR_MARGIN:
-        return series.result("keep_going", "bounce_unclear", None, taps_every)
-    return series.result("keep_going", "bounce_wide", shown, taps_every)
+    shown = None if unclear or used < MINIMUM_USED // 2 else rhythm
+    # The first line that applies decides.
+    lines: tuple[tuple[bool, State, str, Rhythm | None], ...] = (
+        (enough and unsteady, "start_again", "bounce_unsteady", None),
+        (len(series.counted) >= MINIMUM_USED and too_many, "start_again", "bounce_accidents", None),
+        (enough and strange, "start_again", "bounce_frequency", None),
+        (enough and series.is_clear() and not wide, "done", "bounce_done", rhythm),
+        (len(series.times) >= MOST_TAPS, "start_again", "bounce_no_success", None),
+        (series.after_pause, "keep_going", "bounce_restart", shown),
+        (not enough, "keep_going", "bounce_more_taps", shown),
+        (unclear, "keep_going", "bounce_unclear", None),
+        (not series.is_clear(), "keep_going", "bounce_no_rhythm_yet", shown),
+        (True, "keep_going", "bounce_wide", shown),
+    )
+    state, code, carried = next(line[1:] for line in lines if line[0])
+    data = {"more": float(MINIMUM_USED - used)} if code == "bounce_more_taps" else {}
+    return series.result(state, code, carried, taps_every, **data)
 
 
 def _inside(beats: FloatArray, times: FloatArray) -> tuple[BoolArray, FloatArray]:

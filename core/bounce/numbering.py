@@ -6,10 +6,11 @@
 Everything depends on this. One beat counted wrong in ten is an error of a tenth, far more than
 unsteady fingers cause. So whole numberings compete: each trial period numbers all taps at once,
 and the numbering that needs the fewest accidents to explain the taps wins. How clearly it wins is
-part of the result.
+part of the result; and so is how clearly it beats the view that there is no rhythm at all.
 """
 
 from dataclasses import dataclass
+from math import lgamma, log, log1p, pi
 from typing import Final
 
 import numpy as np
@@ -28,7 +29,8 @@ ROUNDS: Final = 4  # of fitting and numbering again; changes end after two or th
 MISSED_COST: Final = 2.7  # ln(1 / 0.07): one beat in fifteen is missed
 DOUBLED_SHARE: Final = 0.1  # [-] one tap in ten is a double, anywhere within its beat
 TYPICAL_JITTER: Final = 0.025  # [s] of a tap around its beat
-JITTER_DOUBT: Final = 2.0  # [-] shape of the inverse-gamma distribution of its square
+VARIANCE_SHAPE: Final = 2.0  # [-] how firmly typical scatters are believed: not very
+TYPICAL_SCATTER: Final = 0.35  # [-] of the intervals of a tapper without rhythm, on a log scale
 RIVAL_DISTANCE: Final = 0.06  # [-] numberings with nearer periods are the same to a rider
 
 
@@ -40,11 +42,13 @@ class Numbering:
         beats: beat number of each tap, from 0; shape (taps,).
         kept: False for the second tap of a beat; shape (taps,).
         margin: how much likelier it is than the best numbering of another period [nats].
+        evidence: how much likelier it is than intervals of no rhythm [nats].
     """
 
     beats: IntArray
     kept: BoolArray
     margin: float
+    evidence: float
 
 
 def number_beats(times: FloatArray) -> Numbering:
@@ -56,7 +60,7 @@ def number_beats(times: FloatArray) -> Numbering:
         C = −ln p(r) + 2.7 missed + ln(10 P) doubled
 
     with p(r) the probability density of the residuals r about the line, normal with an unknown
-    variance of inverse-gamma distribution around (25 ms)²; `missed` the beats without a tap; and
+    variance around (25 ms)² (`_cost_of_scatter`); `missed` the beats without a tap; and
     `doubled` the taps beyond the first of a beat, which may fall anywhere in the period P [s].
 
     Args:
@@ -72,10 +76,20 @@ def number_beats(times: FloatArray) -> Numbering:
     best = int(np.argmin(costs))
     rivals = np.abs(periods / periods[best] - 1.0) > RIVAL_DISTANCE
     margin = float(costs[rivals].min() - costs[best]) if rivals.any() else np.inf
-    return Numbering(beats[best] - beats[best].min(), kept[best], margin)
+    evidence = _cost_of_no_rhythm(times) - float(costs[best])
+    return Numbering(beats[best] - beats[best].min(), kept[best], margin, evidence)
 
 
-def _assign(times: FloatArray, starts: FloatArray, periods: FloatArray) -> tuple[IntArray, BoolArray]:
+def _cost_of_no_rhythm(times: FloatArray) -> float:
+    """Return the cost of independent log-normal intervals of unknown mean and variance [nats]."""
+    logs = np.log(np.diff(times))
+    spread = float(((logs - logs.mean()) ** 2).sum())
+    return float(logs.sum()) + _cost_of_scatter(spread, len(logs) - 1, TYPICAL_SCATTER)
+
+
+def _assign(
+    times: FloatArray, starts: FloatArray, periods: FloatArray
+) -> tuple[IntArray, BoolArray]:
     """Number the taps for every trial; of two taps on one beat, the nearer one is kept."""
     places = (times - starts[:, None]) / periods[:, None]
     beats = np.rint(places).astype(np.int64)
@@ -113,23 +127,32 @@ def _costs(
     count = kept.sum(axis=1)
     doubled = beats.shape[1] - count
     missed = np.ptp(beats, axis=1) + 1 - count
-    scale = TYPICAL_JITTER**2 * JITTER_DOUBT
     squares = (residuals**2).sum(axis=1)
-    freedom = np.maximum(count - 2, 0)  # the line takes two
-    fit = (
-        (JITTER_DOUBT + freedom / 2) * np.log1p(squares / (2 * scale))
-        + freedom / 2 * np.log(2 * np.pi * scale)
-        + _log_gamma_ratio(freedom)
-    )
+    fit = [
+        _cost_of_scatter(spread, freedom, TYPICAL_JITTER)
+        for spread, freedom in zip(squares.tolist(), (count - 2).tolist(), strict=True)
+    ]
     costs: FloatArray = (
-        fit + MISSED_COST * missed + np.log(periods / DOUBLED_SHARE) * doubled
+        np.array(fit) + MISSED_COST * missed + np.log(periods / DOUBLED_SHARE) * doubled
     )
     return costs
 
 
-def _log_gamma_ratio(freedom: IntArray) -> FloatArray:
-    """Return ln Γ(α) − ln Γ(α + ν/2) for the shape α of the jitter's distribution."""
-    from math import lgamma
+def _cost_of_scatter(squares: float, freedom: int, typical: float) -> float:
+    """Return −ln of the density of normal deviations whose variance isn't known [nats].
 
-    values = {int(f): lgamma(JITTER_DOUBT) - lgamma(JITTER_DOUBT + f / 2) for f in set(freedom)}
-    return np.array([values[int(f)] for f in freedom])
+    −ln p = (α + ν/2) ln(1 + Q / 2β) + ν/2 ln(2π β) + ln Γ(α) − ln Γ(α + ν/2),  β = α σ₀²
+
+    with Q the sum of squares, ν its degrees of freedom, σ₀ the typical deviation and α the shape of
+    the inverse-gamma distribution that the variance is given.
+
+    Source: Bayesian linear regression with a conjugate prior, any textbook; from memory.
+    """
+    half = max(freedom, 0) / 2
+    scale = VARIANCE_SHAPE * typical**2
+    return (
+        (VARIANCE_SHAPE + half) * log1p(squares / (2 * scale))
+        + half * log(2 * pi * scale)
+        + lgamma(VARIANCE_SHAPE)
+        - lgamma(VARIANCE_SHAPE + half)
+    )

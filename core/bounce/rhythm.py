@@ -16,8 +16,8 @@ from core.checks import FloatArray
 TYPICAL_JITTER: Final = 0.024  # [s] of a tap around its beat; from habit, no source
 JITTER_FACTOR: Final = 1.7  # [-] one standard deviation up or down, on a log scale
 JITTERS: Final = TYPICAL_JITTER * JITTER_FACTOR ** np.linspace(-2.0, 2.0, 7)  # [s]
-WANDERS: Final = np.array([0.0, 0.005, 0.01, 0.02, 0.03, 0.045])  # [-] of the period, per beat
-TYPICAL_WANDER: Final = 0.02  # [-] of the period, per beat
+WANDERS: Final = np.array([0.0, 0.01, 0.02, 0.03, 0.045, 0.06])  # [-] of the period, per beat
+TYPICAL_WANDER: Final = 0.035  # [-] of the period, per beat
 
 _JITTER, _WANDER = (axis.ravel() for axis in np.meshgrid(JITTERS, WANDERS, indexing="ij"))
 _LOG_PRIOR: Final = (
