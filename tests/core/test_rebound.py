@@ -110,6 +110,27 @@ def test_ends_of_the_phase_range_have_answers(friction_share):
         assert at_rest > 0.99
 
 
+@given(frequency=frequencies, friction_share=frictions)
+def test_ends_of_the_phase_range_are_those_of_real_releases(frequency, friction_share):
+    earliest, latest = phase_range(friction_share)
+    undamped, _ = release(frequency, 0.0, friction_share)
+    assert_allclose(TURN * frequency * undamped[0], earliest, rtol=1e-6)
+    _, overshoot = release(frequency, damping_from_phase(latest, friction_share), friction_share)
+    assert abs(overshoot) < 1e-6
+
+
+def test_solver_needs_only_its_quick_steps(monkeypatch):
+    monkeypatch.setattr("core.rebound._HALVINGS", 0)
+    phase = np.linspace(1.65, 6.0, 500)
+    for friction_share in (0.0, 0.01, 0.05):
+        inside = phase < 0.98 * phase_range(friction_share)[1]
+        damping_ratio = damping_from_phase(phase[inside], friction_share)
+        shifted = friction_share + (1 - friction_share) * free_response(
+            phase[inside] / TURN, 1.0, damping_ratio
+        )
+        assert_allclose(shifted, 0.0, atol=1e-12)
+
+
 def test_solution_is_exact_for_arrays_of_all_sizes():
     phase = np.linspace(1.5708, 90.0, 5000).reshape(50, 100)
     damping_ratio = damping_from_phase(phase)

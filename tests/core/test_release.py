@@ -6,7 +6,7 @@ from numpy.testing import assert_allclose
 
 from core.errors import InvalidInputError, NoSolutionError
 from core.oscillator import overshoot_from_damping
-from core.rebound import crossing_time
+from core.rebound import crossing_time, damping_from_crossing
 from core.release import (
     FRAME_SD,
     HAND_TIMING_SD,
@@ -63,6 +63,21 @@ def test_film_finds_the_damping_back(damping_ratio, frequency):
     assert_allclose(found.ratio.value, damping_ratio, rtol=1e-9)
     assert found.ratio.low <= damping_ratio <= found.ratio.high
     assert found.at_least == found.ratio.low
+
+
+def test_film_takes_friction_out():
+    share = 0.05
+    # Where a release with ζ = 0.3 and friction passes the mark, from `core.rebound` itself.
+    times = np.linspace(0.13, 0.2, 7001)
+    time = np.interp(0.3, damping_from_crossing(times, 2.0, share), times)
+    found = damping_by_time(Measured(time, 0.002), Measured(2.0), Measured(share, 0.01))
+    assert_allclose(found.ratio.value, 0.3, atol=1e-6)
+    # Time and friction both count: 2 ms are about 0.013, a fifth of the friction 0.011.
+    assert_allclose(found.ratio.as_measured().sd, np.hypot(0.0143, 0.0104), rtol=0.1)
+
+
+def test_hand_timing_is_30_ms_at_either_end():
+    assert_allclose(HAND_TIMING_SD, np.hypot(0.03, 0.03))
 
 
 @given(damping_ratio=st.floats(0.05, 0.7))

@@ -134,6 +134,11 @@ def test_filtering_speed_passes_everything_on(spacing, frequency, damping_ratio)
     assert_allclose(transmissibility(ratio, damping_ratio), 1.0, rtol=1e-12)
 
 
+@given(spacing=spacings, frequency=frequencies)
+def test_resonant_speed_without_damping_has_one_bump_a_swing(spacing, frequency):
+    assert_allclose(resonant_speed(spacing, frequency), spacing * frequency)
+
+
 @given(lower=dampings, step=st.floats(0.01, 1.0))
 def test_damping_lowers_the_peak_and_its_speed(lower, step):
     assert peak_response_ratio(lower + step) < peak_response_ratio(lower) < 1.0
@@ -206,6 +211,10 @@ def test_slower_rebound_packs_more_and_recovers_less(interval, return_time):
     assert recovered_share(interval, slower) <= recovered_share(interval, return_time)
 
 
+def test_all_of_a_bump_may_be_left():
+    assert_allclose(interval_for(1.0, 0.1), 0.1 * np.log(2.0))
+
+
 @pytest.mark.parametrize("packed", [0.0, -0.1, 1.1, np.nan])
 def test_rest_that_cannot_be_left_is_refused(packed):
     with pytest.raises(InvalidInputError):
@@ -271,8 +280,11 @@ def test_notes_tell_the_limits_of_the_answer():
 def test_notes_tell_when_travel_or_damping_do_not_fit():
     high = replace(BRAKING_BUMPS, height=Measured(0.1))
     resonant = Measured(2.5)
-    assert "stroke_tops_out" in codes(ride(high, resonant, replace(FORK, sag=0.03)))
-    assert "stroke_bottoms" in codes(ride(high, resonant, replace(FORK, sag=0.07, travel=0.1)))
+    out = ride(high, resonant, replace(FORK, sag=0.03))
+    assert {"room_m": 0.03} in [note.data for note in out.notes if note.code == "stroke_tops_out"]
+    down = ride(high, resonant, replace(FORK, sag=0.07, travel=0.1))
+    (room,) = [note.data["room_m"] for note in down.notes if note.code == "stroke_bottoms"]
+    assert_allclose(room, 0.03)
     roomy = ride(high, resonant, replace(FORK, sag=0.2, travel=0.5))
     assert not codes(roomy) & {"stroke_tops_out", "stroke_bottoms"}
     uneven = ride(BRAKING_BUMPS, resonant, replace(FORK, compression=Measured(0.1)))
@@ -299,6 +311,21 @@ def test_regimes(ratio, regime):
 )
 def test_circuits_of_a_fork(speed, circuit):
     assert circuit_at(speed, FORK_CROSSOVER) == circuit
+
+
+@pytest.mark.parametrize(
+    ("speed", "circuit"),
+    [(0.04, "low"), (0.05, "crossover"), (0.3, "crossover"), (0.31, "high")],
+)
+def test_circuits_of_a_shock(speed, circuit):
+    assert circuit_at(speed, SHOCK_CROSSOVER) == circuit
+
+
+def test_defaults_are_a_forks():
+    # Common practice, no source: 3 to 5 kg move with a wheel that carries 30 to 50 kg.
+    assert 3 / 50 < FORK.wheel_share < 5 / 30
+    assert FORK.crossover == FORK_CROSSOVER
+    assert FORK.leverage == Measured(1.0)
 
 
 def test_wheel_leaves_the_ground_at_the_following_limit():
