@@ -120,6 +120,11 @@ def theme(palette: Palette) -> ft.Theme:
     )
 
 
+def bold(size: float) -> ft.TextStyle:
+    """Return the style of words on buttons, which don't take the theme's typeface by themselves."""
+    return ft.TextStyle(size=size, weight=ft.FontWeight.BOLD, font_family=FONT)
+
+
 def contrast(one: str, other: str) -> float:
     """Return the contrast ratio of two colours, 1 to 21.
 

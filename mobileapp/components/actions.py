@@ -28,7 +28,7 @@ def main_action(
         height=theme.MAIN_ACTION,
         style=ft.ButtonStyle(
             shape=ft.RoundedRectangleBorder(radius=theme.CORNER),
-            text_style=ft.TextStyle(size=theme.TITLE, weight=ft.FontWeight.BOLD),
+            text_style=theme.bold(theme.TITLE),
             icon_size=theme.TITLE + 6,
             side=ft.BorderSide(2, theme.ACCENT),
         ),
@@ -63,7 +63,5 @@ def word_action(
         on_click=on_click,
         url=url,
         height=theme.TOUCH,
-        style=ft.ButtonStyle(
-            text_style=ft.TextStyle(size=theme.BODY, weight=ft.FontWeight.BOLD), color=theme.ACCENT
-        ),
+        style=ft.ButtonStyle(text_style=theme.bold(theme.BODY), color=theme.ACCENT),
     )

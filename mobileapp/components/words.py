@@ -34,14 +34,23 @@ def alarm(text: str) -> ft.Control:
 
 
 def figure(reading: Reading, size: int = theme.LARGE) -> ft.Control:
-    """A reading in large figures, its unit and ± smaller beside it."""
-    return ft.Text(
-        spans=[
-            ft.TextSpan(reading.value, _figures(size)),
-            ft.TextSpan(f"\N{NO-BREAK SPACE}{reading.unit}", _figures(size // 2)),
-            ft.TextSpan(f"  {reading.range}", _figures(size // 2)),
-        ],
-        semantics_label=str(reading),
+    """A reading in large figures, its unit smaller beside it and its ± below."""
+    return ft.Semantics(
+        label=str(reading),
+        container=True,
+        exclude_semantics=True,
+        content=ft.Column(
+            spacing=0,
+            controls=[
+                ft.Text(
+                    spans=[
+                        ft.TextSpan(reading.value, _figures(size)),
+                        ft.TextSpan(f"\N{NO-BREAK SPACE}{reading.unit}", _figures(size // 2)),
+                    ]
+                ),
+                ft.Text(reading.range, size=theme.TITLE, color=theme.INK),
+            ],
+        ),
     )
 
 

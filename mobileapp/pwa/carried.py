@@ -52,7 +52,7 @@ _PACKAGES_AT_HOME = """
     numpy._core._umath_tests numpy._core.cversions numpy._core.include numpy._core.lib
     numpy._core.tests numpy._pyinstaller numpy._typing.tests numpy.conftest numpy.core
     numpy.ctypeslib numpy.distutils numpy.doc numpy.f2py numpy.fft numpy.lib.recfunctions
-    numpy.lib.tests numpy.linalg.lapack_lite numpy.linalg.tests numpy.ma numpy.matlib
+    numpy.lib.tests numpy.linalg.lapack_lite numpy.linalg.tests numpy.matlib
     numpy.matrixlib.tests numpy.polynomial numpy.random numpy.testing numpy.tests
 """.split()  # noqa: SIM905  # a paragraph reads better than a line a name
 

@@ -6,6 +6,7 @@ from typing import Final, Literal
 import numpy as np
 
 from core.checks import Quantity
+from core.errors import NoSolutionError
 from core.oscillator import frequency_from_deflection
 from core.uncertainty import Estimate, Measured, propagate
 from core.units import DEGREE, MM
@@ -62,12 +63,16 @@ def sag_view(end: End, entered: SagReading, texts: Texts) -> SagView:
     share = propagate(lambda s, t: s / t, sag, travel)
     low, high = BANDS[end]
     limits = {"low": number(100 * low, 0), "high": number(100 * high, 0)}
-    frequency = _frequency(end, entered, sag, travel)
     notes = []
     if not USUAL[0] <= share.value <= USUAL[1]:
         notes.append(texts("sag.unusual"))
-    if frequency is None:
-        notes.append(texts("sag.frequency.unknown"))
+    try:
+        frequency = _frequency(end, entered, sag, travel)
+        if frequency is None:
+            notes.append(texts("sag.frequency.unknown"))
+    except NoSolutionError:
+        frequency = None
+        notes.append(texts("sag.frequency.too_small"))
     return SagView(
         percent=shown(share, "%", comma=texts.comma),
         share=share.value,

@@ -76,6 +76,9 @@ TEXTS: Final = {
     ),
     "sag.frequency": "Wippt mit etwa",
     "sag.frequency.unknown": "Mit dem Federweg am Rad zeigt sich die Frequenz dazu.",
+    "sag.frequency.too_small": (
+        "So wenig Sag lässt sich nicht genau genug für eine Frequenz ablesen."
+    ),
     "sag.band": "üblich {low} bis {high} %",
     "sag.band.within": "im üblichen Bereich, {low} bis {high} %",
     "sag.band.below": "unter den üblichen {low} bis {high} %: straffer als die meisten fahren",

@@ -64,6 +64,7 @@ TEXTS: Final = {
     ),
     "sag.frequency": "Bounces at about",
     "sag.frequency.unknown": "Set the wheel travel to see the frequency that follows.",
+    "sag.frequency.too_small": "So little sag can't be read closely enough for a frequency.",
     "sag.band": "usual {low} to {high} %",
     "sag.band.within": "inside the usual {low} to {high} %",
     "sag.band.below": "below the usual {low} to {high} %: stiffer than most ride it",
