@@ -18,6 +18,7 @@ JITTER_FACTOR: Final = 1.7  # [-] one standard deviation up or down, on a log sc
 JITTERS: Final = TYPICAL_JITTER * JITTER_FACTOR ** np.linspace(-2.0, 2.0, 7)  # [s]
 WANDERS: Final = np.array([0.0, 0.01, 0.02, 0.03, 0.045, 0.06])  # [-] of the period, per beat
 TYPICAL_WANDER: Final = 0.035  # [-] of the period, per beat
+NEGLIGIBLE: Final = -40.0  # [nats] what is that much less likely has no weight
 
 _JITTER, _WANDER = (axis.ravel() for axis in np.meshgrid(JITTERS, WANDERS, indexing="ij"))
 _LOG_PRIOR: Final = (
@@ -73,7 +74,8 @@ def measure_rhythm(beats: FloatArray, times: FloatArray) -> Rhythm:
     log_volume = 2 * np.log(np.diagonal(whitener, axis1=1, axis2=2)).sum(axis=1)
     determinant = normal[:, 0, 0] * normal[:, 1, 1] - normal[:, 0, 1] ** 2
     log_weight = _LOG_PRIOR - 0.5 * (misfit + log_volume + np.log(determinant))
-    weight = np.exp(log_weight - log_weight.max())
+    behind = log_weight - log_weight.max()
+    weight = np.where(behind > NEGLIGIBLE, np.exp(np.maximum(behind, NEGLIGIBLE)), 0.0)
     weight /= weight.sum()
     corrections = solution[:, 1]
     correction = float(weight @ corrections)

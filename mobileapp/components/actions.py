@@ -39,18 +39,18 @@ def icon_action(
     label: str, icon: ft.IconData, on_click: Handler, color: ft.ColorValue = theme.ACCENT
 ) -> ft.Control:
     """A sign alone; its label is for screen readers."""
-    return ft.Semantics(
-        label=label,
-        button=True,
-        container=True,
-        content=ft.IconButton(
-            icon,
-            on_click=on_click,
-            icon_color=color,
-            icon_size=theme.TITLE + 6,
-            width=theme.TOUCH,
-            height=theme.TOUCH,
-        ),
+    return ft.MergeSemantics(
+        content=ft.Semantics(
+            label=label,
+            content=ft.IconButton(
+                icon,
+                on_click=on_click,
+                icon_color=color,
+                icon_size=theme.TITLE + 6,
+                width=theme.TOUCH,
+                height=theme.TOUCH,
+            ),
+        )
     )
 
 
