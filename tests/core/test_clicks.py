@@ -59,7 +59,7 @@ def test_far_target_is_approached_in_a_step():
     assert advice.fitting.value > 20
     assert (advice.clicks, advice.turn) == (8, 2)
     assert codes(advice) == ["clicks_step"]
-    closing = clicks_for_damping(tried(10, 0.3), tried(8, 0.33), 0.8)
+    closing = clicks_for_damping(tried(10, 0.3, 0.005), tried(8, 0.33, 0.005), 0.8)
     assert (closing.clicks, closing.turn, codes(closing)) == (6, -2, ["clicks_step"])
 
 
