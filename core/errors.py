@@ -6,11 +6,13 @@ person's own units and language. The English sentences live in `core.messages`.
 
 from collections.abc import Mapping
 from dataclasses import dataclass, field
-
-import numpy as np
-from numpy.typing import NDArray
+from typing import TYPE_CHECKING
 
 from core.messages import sentence
+
+if TYPE_CHECKING:  # a sentence needs no numpy, which the app loads only after its first screen
+    import numpy as np
+    from numpy.typing import NDArray
 
 
 class SetupError(ValueError):
@@ -23,7 +25,7 @@ class SetupError(ValueError):
         where: of array inputs, the elements at fault; None where the error doesn't tell.
     """
 
-    where: NDArray[np.bool_] | None = None
+    where: "NDArray[np.bool_] | None" = None
 
     def __init__(self, code: str, field: str | None = None, **data: float | str) -> None:
         super().__init__(sentence(code, data))
