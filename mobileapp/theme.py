@@ -55,7 +55,7 @@ DARK: Final = Palette(
     quiet="#C9CFCC",
     accent="#7FD6CD",
     on_accent="#06201E",
-    band="#1F4A46",
+    band="#173B38",
     line="#7C8683",
     alarm="#FFB59B",
 )
