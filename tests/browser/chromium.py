@@ -4,6 +4,7 @@ import os
 import shutil
 import subprocess
 import sys
+from functools import cache
 from pathlib import Path
 
 from playwright.sync_api import Error
@@ -26,39 +27,46 @@ HOW = (
 )
 
 
-def find_chromium(playwright):
+@cache
+def find_chromium():
     """Return the path of a Chromium: named, installed, Playwright's own, or newly installed.
 
     Raises:
         RuntimeError: there is none, and none can be had; says how a person gets one.
     """
     for attempt in (_named, _installed, _own, _download, _package):
-        if path := attempt(playwright):
+        if path := attempt():
             return path
     raise RuntimeError(HOW)
 
 
-def _named(_playwright):
+def _named():
     return os.environ.get("CHROMIUM")
 
 
-def _installed(_playwright=None):
+def _installed():
     return next(filter(None, map(shutil.which, NAMES)), None)
 
 
-def _own(playwright):
-    path = playwright.chromium.executable_path
+def _own():
+    """Ask in a process of its own: Playwright starts only once in one."""
+    ask = (
+        "from playwright.sync_api import sync_playwright as start\n"
+        "with start() as playwright: print(playwright.chromium.executable_path)"
+    )
+    done = subprocess.run([sys.executable, "-c", ask], check=True, capture_output=True, text=True)
+    path = done.stdout.strip()
     return path if Path(path).exists() else None
 
 
-def _download(playwright):
+def _download():
     """Let Playwright download its own, where its host can be reached."""
     command = [sys.executable, "-m", "playwright", "install", "chromium"]
     done = subprocess.run(command, check=False, capture_output=True, timeout=600)
-    return _own(playwright) if done.returncode == 0 else None
+    return _own() if done.returncode == 0 else None
 
 
-def _package(_playwright):
+def _package():
     """Install the system's package, where we may."""
     if not shutil.which("apt-get") or os.geteuid() != 0:
         return None
@@ -70,6 +78,6 @@ def _package(_playwright):
 def launch(playwright):
     """Start a Chromium."""
     try:
-        return playwright.chromium.launch(executable_path=find_chromium(playwright), args=ARGUMENTS)
+        return playwright.chromium.launch(executable_path=find_chromium(), args=ARGUMENTS)
     except Error as error:
         raise RuntimeError(f"Chromium did not start: {error}. {HOW}") from error

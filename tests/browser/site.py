@@ -38,8 +38,9 @@ class Server:
         for line in self.process.stdout:
             if found := re.search(r"localhost:(\d+)/", line):
                 self.port = int(found[1])
-                break
-        self._wait()
+                self._wait()
+                return
+        raise RuntimeError("the server did not start")
 
     def kill(self):
         """Be gone, connections and all."""

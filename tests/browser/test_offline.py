@@ -2,7 +2,8 @@
 
 import json
 
-from tests.browser.phone import Phone
+from tests.browser.chromium import ARGUMENTS, find_chromium
+from tests.browser.phone import PHONE, Phone
 
 
 def test_it_starts_without_the_server_again_and_again(phone, server):
@@ -30,13 +31,18 @@ def test_everything_served_is_on_the_list_with_its_hash(site):
     assert present - twins == listed | {"sw.js", "release.json"}
 
 
-def test_the_browser_would_install_it(phone):
-    phone.offline_ready()
-    devtools = phone.context.new_cdp_session(phone.page)
+def test_the_browser_would_install_it(chromium, server, tmp_path):
+    # Chromium installs nothing from the private profiles that other tests use.
+    context = chromium.browser_type.launch_persistent_context(
+        tmp_path, executable_path=find_chromium(), args=ARGUMENTS, **PHONE
+    )
+    phone = Phone(context, server.address).open().offline_ready()
+    devtools = context.new_cdp_session(phone.page)
     assert devtools.send("Page.getInstallabilityErrors")["installabilityErrors"] == []
     manifest = devtools.send("Page.getAppManifest")
     assert manifest["errors"] == []
     assert json.loads(manifest["data"])["id"] == "./"
+    context.close()
 
 
 def test_the_policy_forbids_other_origins(phone):

@@ -18,8 +18,9 @@ const settings = {
   entrypointBaseUrl: folder,
   assetBase: folder,
   canvasKitBaseUrl: `${folder}canvaskit/`,
-  // The service worker keeps one variant, and decides by the same test (sw.js).
-  canvasKitVariant: "v8BreakIterator" in Intl ? "chromium" : "full",
+  // The service worker keeps one variant and decides by the first of these (sw.js). The second is
+  // missing only where there are no service workers either: at insecure addresses.
+  canvasKitVariant: "v8BreakIterator" in Intl && "ImageDecoder" in self ? "chromium" : "full",
   // Glyphs that our fonts lack stay missing; no other origin is asked for them.
   fontFallbackBaseUrl: `${folder}assets/fonts/`,
 };
@@ -39,9 +40,17 @@ document.body.append = (...children) => {
   return Element.prototype.append.apply(document.body, ours);
 };
 
-/** Load and run the client; resolves when it runs. */
+/** Load and run the client; resolves when it runs, rejects when a part of it is missing. */
 export async function startClient() {
   await loadScript(`${folder}flutter.js`);
+  const missing = new Promise((_, reject) => {
+    // The client's own loader waits for ever for a script that doesn't come.
+    addEventListener("error", ({ target }) => target.src && reject(new Error(target.src)), true);
+  });
+  await Promise.race([missing, run()]);
+}
+
+async function run() {
   const { _flutter: flutter } = globalThis;
   flutter.buildConfig = {
     builds: [{ compileTarget: "dart2js", renderer: "canvaskit", mainJsPath: "main.dart.js" }],

@@ -40,6 +40,9 @@ new PerformanceObserver((list) => {
 
 let pyodide;
 
+// The interpreter reports a missing or damaged part of its own to nobody.
+self.addEventListener("unhandledrejection", ({ reason }) => pyodide || explain(reason));
+
 async function start() {
   const pack = load("app.pack");
   pyodide = await loadPyodide({
