@@ -119,6 +119,11 @@ def apply_update() -> None:
     _post("update")
 
 
+def sound(cue: Literal["tap", "done", "again"]) -> None:
+    """Make a cue heard."""
+    _post("sound", name=cue)
+
+
 def keep_storage() -> None:
     """Ask the browser not to delete this site's storage when space runs short."""
     _post("persist")

@@ -16,6 +16,8 @@ async def main(page: ft.Page) -> None:
     page.theme = theme.theme(theme.SUN)
     page.dark_theme = theme.theme(theme.DARK)
     page.theme_mode = ft.ThemeMode.LIGHT  # the sun first; the dark is a setting
+    page.on_resize = lambda: state.turned(page)
+    state.turned(page)
     await state.start()
     page.render_views(App, state)
     browser.mark_usable()

@@ -47,6 +47,7 @@ class AppState:
         calculator: whether numpy is there.
         trouble: keys of sentences about records and saving that a person must see.
         deleted: the setup deleted last, while it can be brought back.
+        landscape: whether the screen is wider than high.
     """
 
     texts: Texts = field(default_factory=lambda: Texts(browser.language()))
@@ -57,6 +58,7 @@ class AppState:
     calculator: bool = False
     trouble: tuple[str, ...] = ()
     deleted: Setup | None = None
+    landscape: bool = False
 
     async def start(self) -> None:
         """Open the store and read what is in it."""
@@ -77,6 +79,10 @@ class AppState:
                 except RecordError as error:
                     self._report(error.code)
         self.setups = tuple(sorted(setups, key=lambda setup: setup.made, reverse=True))
+
+    def turned(self, page: ft.Page) -> None:
+        """Note how the phone is held."""
+        self.landscape = (page.width or 0) > (page.height or 0)
 
     async def follow_page(self) -> None:
         """Hear of offline use and updates, and get the calculator."""
@@ -105,13 +111,13 @@ class AppState:
 
         return sag_view(end, setup.sag[end], self.texts)
 
-    def bounce_view(self, run: BounceRun) -> "BounceView | None":
-        """Return what to show for the taps so far; None while the calculator isn't there."""
-        if not self.calculator:
+    def bounce_view(self, run: BounceRun | None, *, kept: bool = False) -> "BounceView | None":
+        """Return what to show for taps; None without any, or while the calculator isn't there."""
+        if not self.calculator or run is None:
             return None
         from mobileapp.results.bounce import bounce_view  # noqa: PLC0415 - numpy comes late
 
-        return bounce_view(run, self.texts)
+        return bounce_view(run, self.texts, kept=kept)
 
     def save_reading(self, key: str, end: End, **changes: Amount) -> None:
         """Change values of a reading, and keep it."""

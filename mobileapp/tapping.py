@@ -1,8 +1,11 @@
 """A bounce test while it is being tapped."""
 
 from dataclasses import dataclass
+from typing import Final
 
 from mobileapp.records import BounceRun
+
+TAPS_EVERY: Final = (1, 2)  # every bottom, or every second one of a quick bounce
 
 
 @dataclass(frozen=True)

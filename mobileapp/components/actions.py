@@ -25,8 +25,9 @@ def main_action(
         content=label,
         icon=icon,
         on_click=on_click,
-        height=theme.MAIN_ACTION,
         style=ft.ButtonStyle(
+            # At least `theme.MAIN_ACTION` high, and more for larger text.
+            padding=(theme.MAIN_ACTION - theme.TITLE) / 2,
             shape=ft.RoundedRectangleBorder(radius=theme.CORNER),
             text_style=theme.bold(theme.TITLE),
             icon_size=theme.TITLE + 6,

@@ -47,7 +47,7 @@ def _option(
         container=True,
         expand=True,
         content=ft.Container(
-            height=theme.TOUCH,
+            padding=theme.MARGIN,  # no fixed height: words grow with the person's text size
             border_radius=theme.CORNER,
             border=ft.Border.all(2, theme.ACCENT),
             bgcolor=theme.ACCENT if chosen else theme.PAPER,
@@ -61,6 +61,9 @@ def _option(
                     *([ft.Icon(ft.Icons.CHECK, color=theme.ON_ACCENT)] if chosen else []),
                     ft.Text(
                         word,
+                        expand=True,
+                        expand_loose=True,
+                        text_align=ft.TextAlign.CENTER,
                         size=theme.BODY,
                         weight=ft.FontWeight.BOLD,
                         color=theme.ON_ACCENT if chosen else theme.ACCENT,

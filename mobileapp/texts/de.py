@@ -101,11 +101,36 @@ TEXTS: Final = {
     "Rhythmus. Tippe hier jedes Mal, wenn es am tiefsten ist.",
     "bounce.again": "Neu anfangen",
     "bounce.finish": "Fertig",
-    "bounce.taps": "{count} Tipper",
     "bounce.keep_going": "Weiter so",
     "bounce.done": "Fertig. Gespeichert.",
     "bounce.start_again": "Neu anfangen",
-    "bounce.beats": "{used} verwendet, {missed} verpasst, {doubled} doppelt",
+    "bounce.kept": "Gespeichert, wie es ist.",
+    "bounce.keep": "So speichern",
+    "bounce.beats": "Bisher: {counts}",
+    "bounce.beats.used": "{count} verwendet",
+    "bounce.beats.warm_up": "{count} zum Einschwingen",
+    "bounce.beats.missed": "{count} verpasst",
+    "bounce.beats.doubled": "{count} doppelt",
+    "bounce.beats.outlier": "{count} daneben",
+    "bounce.every": "Tippen bei",
+    "bounce.every.1": "jedem Tiefpunkt",
+    "bounce.every.2": "jedem zweiten",
+    "bounce.pad.2": "Tippe an jedem zweiten tiefsten Punkt",
+    "core.bounce_few_taps": "Tippe an jedem tiefsten Punkt.",
+    "core.bounce_more_taps": "Bisher gleichmäßig: noch {more} Tipper.",
+    "core.bounce_wide": "Noch ein paar Tipper, dann ist es sicher.",
+    "core.bounce_unclear": "Unklar, welcher Tipper zu welchem Tiefpunkt gehört: jeden einmal.",
+    "core.bounce_no_rhythm_yet": "Noch kein klarer Rhythmus: überlass ihn dem Rad.",
+    "core.bounce_restart": "Da war eine Pause: gezählt wird ab dem Neubeginn.",
+    "core.bounce_done": "Das genügt.",
+    "core.bounce_unsteady": (
+        "Die Tipper haben keinen festen Rhythmus: überlass ihn dem Rad, dann neu anfangen."
+    ),
+    "core.bounce_accidents": (
+        "Zu viele verpasst oder doppelt: neu anfangen, an jedem Tiefpunkt einmal tippen."
+    ),
+    "core.bounce_frequency": ("So wippt kein Rad: an jedem Tiefpunkt tippen, und neu anfangen."),
+    "core.bounce_no_success": "Dreißig Tipper und noch unsicher: ausruhen, dann neu anfangen.",
     "bounce.no_clock": "Der Browser nennt hier keine genauen Zeiten, das ± ist darum weiter.",
     "bounce.rhythm": (
         "Das ist der Rhythmus des Fahrers. Er kann bis zu ein Zehntel neben dem des Rads liegen."

@@ -3,6 +3,7 @@
 import { startClient } from "./client.js";
 import { keepOffline } from "./offline.js";
 import { onPython, onWorkerError } from "./python.js";
+import "./sound.js";
 import { appState, failed, usable } from "./status.js";
 import "./taps.js";
 

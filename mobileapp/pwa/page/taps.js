@@ -5,6 +5,7 @@
 // stamp travels beside the tap: it is posted first, and Python matches the two by position.
 
 import { onPython, toPython } from "./python.js";
+import { sound } from "./sound.js";
 
 const MILLISECONDS = 1000;
 
@@ -15,6 +16,7 @@ function stamp(event) {
     x: event.clientX,
     y: event.clientY,
   });
+  sound("tap");
 }
 
 onPython("taps", ({ on }) => {
