@@ -80,7 +80,7 @@ WIDEST: Final = 560  # of a column of text and controls
 CORNER: Final = 14
 
 # Type sizes, likewise:
-HUGE: Final = 72
+HUGE: Final = 58  # "21.7" at 200 % still fits a screen 320 wide
 LARGE: Final = 44
 TITLE: Final = 22
 BODY: Final = 18

@@ -47,7 +47,8 @@ def _option(
         container=True,
         expand=True,
         content=ft.Container(
-            padding=theme.MARGIN,  # no fixed height: words grow with the person's text size
+            # No fixed height: words grow with the person's text size.
+            padding=ft.Padding.symmetric(horizontal=theme.GAP, vertical=theme.MARGIN),
             border_radius=theme.CORNER,
             border=ft.Border.all(2, theme.ACCENT),
             bgcolor=theme.ACCENT if chosen else theme.PAPER,

@@ -35,6 +35,7 @@ def screen(
             title=ft.Text(title, size=theme.TITLE, weight=ft.FontWeight.BOLD, color=theme.INK),
             actions=actions or [],
             bgcolor=theme.PAPER,
+            elevation_on_scroll=0,
             toolbar_height=theme.MAIN_ACTION,
         ),
         controls=[

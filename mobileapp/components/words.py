@@ -45,7 +45,7 @@ def figure(reading: Reading, size: int = theme.LARGE) -> ft.Control:
                 ft.Text(
                     spans=[
                         ft.TextSpan(reading.value, _figures(size)),
-                        ft.TextSpan(f"\N{NO-BREAK SPACE}{reading.unit}", _figures(size // 2)),
+                        ft.TextSpan(f" {reading.unit}", _figures(size // 2)),
                     ]
                 ),
                 ft.Text(reading.range, size=theme.TITLE, color=theme.INK),

@@ -12,6 +12,7 @@ from mobileapp.components.choice import choice
 from mobileapp.components.strip import strip
 from mobileapp.components.words import alarm, body, figure
 from mobileapp.format import Reading
+from mobileapp.pictures.swing import when_to_tap
 from mobileapp.shared import use_app
 from mobileapp.tapping import TAPS_EVERY, Tapping
 from mobileapp.texts import Texts
@@ -162,6 +163,7 @@ def _before(texts: Texts, taps_every: int, choose: Callable[[int], None]) -> lis
             str(taps_every),
             lambda every: choose(int(every)),
         ),
+        when_to_tap(texts("bounce.picture")),
     ]
 
 

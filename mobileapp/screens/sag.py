@@ -11,12 +11,15 @@ from mobileapp.components.frame import card, screen
 from mobileapp.components.gauge import gauge
 from mobileapp.components.stepper import Stepper
 from mobileapp.components.words import alarm, body, figure, title
+from mobileapp.pictures.o_ring import o_ring_on_fork, o_ring_on_shock
 from mobileapp.records import ENDS, PLACES, End
 from mobileapp.shared import use_app
 from mobileapp.state import AppState
 
 if TYPE_CHECKING:  # it needs numpy, which arrives after the first paint
     from mobileapp.results.sag import SagView
+
+_PICTURES = {"front": o_ring_on_fork, "rear": o_ring_on_shock}
 
 
 @ft.component
@@ -63,6 +66,7 @@ def SagEnd(app: AppState, setup: str, end: End) -> ft.Control:
         *([stepper(app.texts("sag.wheel_travel"), "wheel_travel")] if at_shock else []),
         stepper(app.texts("sag.reading"), "sag", view.error if view else None),
         *(_result(app, end, view) if view and view.percent else []),
+        *([] if view or entered.place == "wheel" else [_picture(app, end)]),
         *([] if app.calculator else [body(app.texts("app.loading"))]),
     )
 
@@ -74,6 +78,11 @@ def _place(app: AppState, setup: str, place: str) -> ft.Control:
         place,
         lambda key: app.save_place(setup, key),
     )
+
+
+def _picture(app: AppState, end: End) -> ft.Control:
+    """Show where to read, until something has been read."""
+    return _PICTURES[end](app.texts(f"sag.picture.{end}"))
 
 
 def _result(app: AppState, end: End, view: "SagView") -> list[ft.Control]:

@@ -78,6 +78,8 @@ TEXTS: Final = {
         "Sag can't reach the full travel of {travel}. Is this the right travel? Shock or wheel?"
     ),
     "sag.unusual": "Outside what bikes are ridden with; check units and where it was read.",
+    "sag.picture.front": "Read from the fork's seal to the O-ring on its tube.",
+    "sag.picture.rear": "Read from the shock's seal to the O-ring on its shaft.",
     "sag.gauge": "{end}: sag {percent}. {band}",
     "sag.next": "Time a bounce",
     # Bounce
@@ -85,13 +87,14 @@ TEXTS: Final = {
     "bounce.pad": "Tap at every bottom",
     "bounce.pad.first": "Bike held, rider bounces and lets the bike set the rhythm. "
     "Tap here each time the bike is at its lowest.",
+    "bounce.picture": "A bounce over time, with a tap at each of its lowest points.",
     "bounce.again": "Start again",
     "bounce.finish": "Done",
     "bounce.keep_going": "Keep going",
     "bounce.done": "Done. Saved.",
     "bounce.start_again": "Start again",
     "bounce.kept": "Saved as it is.",
-    "bounce.keep": "Save as it is",
+    "bounce.keep": "Save now",
     "bounce.beats": "Beats so far: {counts}",
     "bounce.beats.used": "{count} used",
     "bounce.beats.warm_up": "{count} to get going",
