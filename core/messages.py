@@ -114,6 +114,46 @@ MESSAGES: Final[dict[str, str]] = {
     "bounce_accidents": "Too many missed or doubled taps: start again, one tap a bottom.",
     "bounce_frequency": "No bike bounces like that: tap at every bottom, and start again.",
     "bounce_no_success": "Thirty taps and still unsure: rest, then start again.",
+    # Geometry and springs
+    "head_angle": "A head angle lies between 55 and 80 degrees from the horizontal.",
+    "leverage": "A leverage lies between 0.5 and 6 (wheel travel per shock stroke).",
+    "progression": "A progression lies between -50 and 60 %.",
+    "beyond_travel": (
+        "Sag must lie between nothing and the full {full_m}: check whether shaft or wheel was read."
+    ),
+    "stroke_disagrees": (
+        "Travel, leverage and stroke disagree: the stroke should be {follows_m}, not {printed_m}."
+    ),
+    "coil_binds": "The coil touches before this sag: use a longer or stiffer one.",
+    "coil_shape": "The mean diameter must be more than two wires: outer diameter less one wire.",
+    "air_end": "That is at the very end of the air spring, where no formula holds.",
+    "area_ratio": "The negative side has half to all of the piston's area.",
+    "exponent": "The exponent of air lies between 1 and 1.4.",
+    "joined_at": "The chambers join near full extension: within a quarter of the chamber's length.",
+    "temperature": "That temperature is no riding weather: enter degrees Celsius.",
+    "topped_out": (
+        "The spring carries more than the load even when extended: reduce pressure or preload."
+    ),
+    "bottomed": "The spring can't carry the load within its stroke: stiffer spring, more pressure.",
+    "unstable": "At this sag the linkage would give way under the spring: check the leverage.",
+    # Sag and the change to make
+    "sag_range": (
+        "Sag must lie between nothing and the travel of {travel_m}: check whether shaft or wheel "
+        "was read."
+    ),
+    "sag_unusual": "Outside the usual range: check the units, and where it was read.",
+    "sag_swapped": "Settled from above is the smaller sag: readings swapped, or the mark moved.",
+    "high_friction": "High friction: bushings, seals or posture. Read from both sides.",
+    "no_pressure": "No pressure is low enough for this sag: change the spring or the target.",
+    "above_limit": "The pressure is already above the printed maximum of {limit_pa}: let air out.",
+    "beyond_limit": (
+        "The target needs more than the printed maximum of {limit_pa}. Never go beyond it: a "
+        "volume spacer or another spring is needed."
+    ),
+    "limit_unknown": "Check this against the maximum printed on the unit before you pump.",
+    "large_step": "A large change: make this much, measure again, and go on from there.",
+    "equalise": "Cycle slowly through the first third of travel a few times, then measure.",
+    "no_coil_fits": "No coil at hand reaches the target with little preload; this is the nearest.",
 }
 
 _SUFFIX_UNITS: Final = {
