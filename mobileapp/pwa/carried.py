@@ -11,7 +11,7 @@ _STDLIB_AT_HOME = """
     _pyrepl antigravity bdb cProfile cmd code compileall doctest modulefinder pdb pickletools
     profile pstats py_compile pyclbr pydoc rlcompleter symtable tabnanny this timeit trace
     tracemalloc unittest zipapp __hello__ __phello__ asyncio.__main__ asyncio.tools
-    json.__main__ json.tool pyodide.console sysconfig.__main__
+    json.__main__ json.tool pyodide.console
 
     _ssl ftplib html http imaplib mailbox netrc poplib smtplib socketserver ssl webbrowser wsgiref
     xmlrpc email importlib.metadata mimetypes quopri _markupbase
@@ -24,7 +24,8 @@ _STDLIB_AT_HOME = """
 
     _pyio _pydatetime _pydecimal _py_abc asyncio.proactor_events asyncio.windows_events
     asyncio.windows_utils
-    colorsys difflib graphlib nturl2path plistlib stringprep tomllib wave xml.dom xml.sax
+    colorsys difflib graphlib nturl2path plistlib stringprep tomllib sysconfig
+    _sysconfigdata__emscripten_wasm32-emscripten wave zoneinfo xml.dom xml.sax
 """.split()  # noqa: SIM905  # a paragraph reads better than a line a name
 
 # Standard library that is inside the interpreter itself; its copies as files are never read
@@ -52,8 +53,10 @@ _PACKAGES_AT_HOME = """
     numpy._core._umath_tests numpy._core.cversions numpy._core.include numpy._core.lib
     numpy._core.tests numpy._pyinstaller numpy._typing.tests numpy.conftest numpy.core
     numpy.ctypeslib numpy.distutils numpy.doc numpy.f2py numpy.fft numpy.lib.recfunctions
-    numpy.lib.tests numpy.linalg.lapack_lite numpy.linalg.tests numpy.matlib
-    numpy.matrixlib.tests numpy.polynomial numpy.random numpy.testing numpy.tests
+    numpy.lib.tests numpy.linalg.lapack_lite numpy.linalg.tests numpy.ma.mrecords numpy.ma.tests
+    numpy.ma.testutils numpy.ma.timer_comparison numpy.matlib numpy.matrixlib.tests
+    numpy.polynomial numpy.random numpy.testing numpy.tests numpy.typing.mypy_plugin
+    numpy.typing.tests
 """.split()  # noqa: SIM905  # a paragraph reads better than a line a name
 
 # Modules that only attach documentation, by calls, so that -OO doesn't drop it.
