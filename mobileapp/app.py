@@ -5,6 +5,7 @@ import flet as ft
 from mobileapp.screens.about import AboutScreen
 from mobileapp.screens.bounce import BounceScreen
 from mobileapp.screens.home import HomeScreen
+from mobileapp.screens.rebound import ReboundScreen
 from mobileapp.screens.sag import SagScreen
 from mobileapp.shared import StateContext
 from mobileapp.state import AppState
@@ -23,6 +24,7 @@ def App(state: AppState) -> ft.Control:
                         ft.Route(path="about", component=AboutScreen),
                         ft.Route(path="sag/:key", component=SagScreen),
                         ft.Route(path="bounce/:key", component=BounceScreen),
+                        ft.Route(path="rebound/:key", component=ReboundScreen),
                     ],
                 )
             ],

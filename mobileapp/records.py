@@ -6,38 +6,28 @@ and left as it is.
 """
 
 import json
-import math
 import secrets
 from collections.abc import Mapping
 from dataclasses import dataclass, field, replace
 from datetime import UTC, datetime
 from typing import Any, Final, Literal
 
-from mobileapp.units import UNITS, Amount
+from mobileapp.record_fields import RecordError, check, pair, to_amount, to_number, to_text
+from mobileapp.release_reading import MOST_TRIES, ReleaseReading
+from mobileapp.release_reading import from_record as release_from_record
+from mobileapp.release_reading import to_record as release_to_record
+from mobileapp.units import Amount
 
 FORMAT: Final = 1
 KIND: Final = "setup"
 
 _LONGEST_RECORD: Final = 65_536  # [characters] a setup with 200 taps needs a tenth of it
 _MOST_TAPS: Final = 500
-_LONGEST_TEXT: Final = 200  # [characters]
 
 End = Literal["front", "rear"]
 ENDS: Final[tuple[End, End]] = ("front", "rear")
 Place = Literal["shaft", "wheel"]
 PLACES: Final[tuple[Place, Place]] = ("shaft", "wheel")
-
-
-class RecordError(ValueError):
-    """A text that isn't a record of ours, or one of a newer format.
-
-    Attributes:
-        code: key of the sentence in `mobileapp.texts`.
-    """
-
-    def __init__(self, code: str) -> None:
-        super().__init__(code)
-        self.code = code
 
 
 @dataclass(frozen=True)
@@ -99,6 +89,7 @@ class Setup:
         sag: readings by end.
         bounce: the last bounce test that was kept.
         shown: the results as they were shown last, in words, for lists.
+        releases: release tests by end, the latest one last.
     """
 
     key: str
@@ -107,6 +98,7 @@ class Setup:
     sag: Mapping[End, SagReading] = field(default_factory=dict)
     bounce: BounceRun | None = None
     shown: tuple[str, ...] = ()
+    releases: Mapping[End, tuple[ReleaseReading, ...]] = field(default_factory=dict)
 
     def reading(self, end: End) -> SagReading:
         """Return the sag reading of an end, or the first guess to step away from."""
@@ -115,6 +107,16 @@ class Setup:
     def with_sag(self, end: End, reading: SagReading) -> "Setup":
         """Return the setup with a reading replaced."""
         return replace(self, sag={**self.sag, end: reading})
+
+    def release(self, end: End) -> ReleaseReading:
+        """Return the latest release test of an end, or the first guess to step away from."""
+        return self.releases.get(end, (ReleaseReading(),))[-1]
+
+    def with_release(self, end: End, reading: ReleaseReading, *, new: bool = False) -> "Setup":
+        """Return the setup with the latest release test of an end replaced, or with a new one."""
+        tries = self.releases.get(end, ())
+        tries = (*(tries if new else tries[:-1]), reading)[-MOST_TRIES:]
+        return replace(self, releases={**self.releases, end: tries})
 
 
 def new_key() -> str:
@@ -137,14 +139,18 @@ def to_json(setup: Setup) -> str:
         "label": setup.label,
         "sag": {
             end: {
-                "travel": _pair(reading.travel),
-                "sag": _pair(reading.sag),
+                "travel": pair(reading.travel),
+                "sag": pair(reading.sag),
                 "place": reading.place,
-                "wheel_travel": _pair(reading.wheel_travel),
+                "wheel_travel": pair(reading.wheel_travel),
             }
             for end, reading in setup.sag.items()
         },
         "shown": list(setup.shown),
+        "releases": {
+            end: [release_to_record(reading) for reading in tries]
+            for end, tries in setup.releases.items()
+        },
     }
     if setup.bounce:
         record["bounce"] = {
@@ -165,7 +171,7 @@ def from_json(text: str) -> Setup:
         raise RecordError("record.damaged")
     try:
         record = json.loads(text)
-        _check(record["format"] <= FORMAT, "record.newer")
+        check(record["format"] <= FORMAT, "record.newer")
         return _setup(record)
     except RecordError:
         raise
@@ -173,56 +179,42 @@ def from_json(text: str) -> Setup:
         raise RecordError("record.damaged") from error
 
 
-def _pair(amount: Amount | None) -> list[float | str] | None:
-    return None if amount is None else [amount.value, amount.unit]
-
-
 def _setup(record: Mapping[str, Any]) -> Setup:
-    _check(record["kind"] == KIND and record["format"] >= 1)
+    check(record["kind"] == KIND and record["format"] >= 1)
     datetime.fromisoformat(record["made"])
     return Setup(
-        key=_text(record["key"]),
+        key=to_text(record["key"]),
         made=record["made"],
-        label=_text(record["label"]),
+        label=to_text(record["label"]),
         sag={end: _sag(record["sag"][end]) for end in ENDS if end in record["sag"]},
         bounce=_bounce(record["bounce"]) if "bounce" in record else None,
-        shown=tuple(_text(line) for line in record["shown"]),
+        shown=tuple(to_text(line) for line in record["shown"]),
+        releases=_releases(record.get("releases", {})),  # setups of the first days have none
     )
 
 
 def _sag(reading: Mapping[str, Any]) -> SagReading:
-    _check(reading["place"] in PLACES)
+    check(reading["place"] in PLACES)
     wheel_travel = reading["wheel_travel"]
     return SagReading(
-        _amount(reading["travel"]),
-        _amount(reading["sag"]),
+        to_amount(reading["travel"]),
+        to_amount(reading["sag"]),
         reading["place"],
-        None if wheel_travel is None else _amount(wheel_travel),
+        None if wheel_travel is None else to_amount(wheel_travel),
     )
 
 
+def _releases(record: Mapping[str, Any]) -> Mapping[End, tuple[ReleaseReading, ...]]:
+    releases = {
+        end: tuple(release_from_record(reading) for reading in record[end])
+        for end in ENDS
+        if end in record
+    }
+    check(all(0 < len(tries) <= MOST_TRIES for tries in releases.values()))
+    return releases
+
+
 def _bounce(run: Mapping[str, Any]) -> BounceRun:
-    taps = tuple(_number(tap) for tap in run["taps"])
-    _check(len(taps) <= _MOST_TAPS and run["every"] in (1, 2))
+    taps = tuple(to_number(tap) for tap in run["taps"])
+    check(len(taps) <= _MOST_TAPS and run["every"] in (1, 2))
     return BounceRun(taps, run["every"], bool(run["page_clock"]))
-
-
-def _amount(pair: Any) -> Amount:  # noqa: ANN401 - straight from JSON
-    value, unit = pair
-    _check(unit in UNITS)
-    return Amount(_number(value), unit)
-
-
-def _number(value: Any) -> float:  # noqa: ANN401 - straight from JSON
-    _check(isinstance(value, int | float) and not isinstance(value, bool) and math.isfinite(value))
-    return float(value)
-
-
-def _text(value: Any) -> str:  # noqa: ANN401 - straight from JSON
-    _check(isinstance(value, str) and len(value) <= _LONGEST_TEXT)
-    return str(value)
-
-
-def _check(valid: bool, code: str = "record.damaged") -> None:  # noqa: FBT001 - reads as a sentence
-    if not valid:
-        raise RecordError(code)

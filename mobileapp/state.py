@@ -22,12 +22,14 @@ from mobileapp.records import (
     new_setup,
     to_json,
 )
+from mobileapp.release_reading import NO_FRAMES, NO_OVERSHOOT
 from mobileapp.store import Store, StoreError, open_store
 from mobileapp.texts import Texts
 from mobileapp.units import SYSTEMS, Amount
 
 if TYPE_CHECKING:  # they need numpy, which arrives after the first paint
     from mobileapp.results.bounce import BounceView
+    from mobileapp.results.rebound import ReboundView
     from mobileapp.results.sag import SagView
 
 RECORD_PREFIX: Final = "setup/"
@@ -119,6 +121,14 @@ class AppState:
 
         return bounce_view(run, self.texts, kept=kept)
 
+    def rebound_view(self, key: str, end: End) -> "ReboundView | None":
+        """Return what to show for a release test; None while the calculator isn't there."""
+        if not self.calculator:
+            return None
+        from mobileapp.results.rebound import rebound_view  # noqa: PLC0415 - numpy comes late
+
+        return rebound_view(self.setup(key), end, self.texts)
+
     def save_reading(self, key: str, end: End, **changes: Amount) -> None:
         """Change values of a reading, and keep it."""
         self.save(self.setup(key).with_sag(end, replace(self.reading(key, end), **changes)))
@@ -126,6 +136,17 @@ class AppState:
     def save_place(self, key: str, place: Place) -> None:
         """Change where the rear was read."""
         self.save(self.setup(key).with_sag("rear", self.reading(key, "rear").at(place)))
+
+    def save_release(self, key: str, end: End, **changes: object) -> None:
+        """Change values of the latest release test, and keep it."""
+        setup = self.setup(key)
+        self.save(setup.with_release(end, replace(setup.release(end), **changes)))
+
+    def begin_release(self, key: str, end: End) -> None:
+        """Begin another release test at an end, read the same way."""
+        setup = self.setup(key)
+        fresh = replace(setup.release(end), overshoot=NO_OVERSHOOT, frames=NO_FRAMES)
+        self.save(setup.with_release(end, fresh, new=True))
 
     def save_bounce(self, key: str, run: BounceRun | None) -> None:
         """Keep a bounce test with its setup; None takes it away."""

@@ -47,6 +47,10 @@ UNITS: Final = {
         Unit("°", si.DEGREE, 0.5, 1),
         Unit("%", 0.01, 1.0, 0),
         Unit("Hz", 1.0, 0.1, 1),
+        Unit("s", 1.0, 0.1, 1),
+        Unit("frames", 1.0, 1.0, 0),
+        Unit("clicks", 1.0, 1.0, 0),
+        Unit("", 1.0, 0.01, 2),
     )
 }
 

@@ -56,10 +56,15 @@ def icon_action(
 
 
 def word_action(
-    label: str, on_click: Handler | None = None, *, url: str | None = None
+    label: str,
+    on_click: Handler | None = None,
+    *,
+    url: str | None = None,
+    key: str | None = None,
 ) -> ft.Control:
     """A word that does something, or leads to another page."""
     return ft.TextButton(
+        key=key,
         content=label,
         on_click=on_click,
         url=url,

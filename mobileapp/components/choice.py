@@ -27,6 +27,8 @@ def choice(
             ft.Text(name, size=theme.SMALL, color=theme.QUIET),
             ft.Row(
                 spacing=theme.GAP,
+                intrinsic_height=True,
+                vertical_alignment=ft.CrossAxisAlignment.STRETCH,
                 controls=[_option(key, word, key == chosen, on_change) for key, word in options],
             ),
         ],

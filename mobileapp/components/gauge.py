@@ -3,9 +3,9 @@
 import flet as ft
 
 from mobileapp import theme
+from mobileapp.components.along import PARTS, along
 
 _SCALE = 0.5  # [-] share of travel at the far end; sag beyond it is no setup
-_PARTS = 1000
 _SHAFT = 44  # [px]
 _RING = 12  # [px]
 
@@ -42,7 +42,7 @@ def gauge(share: float, band: tuple[float, float], label: str) -> ft.Control:
                             border=ft.Border.all(2, theme.LINE),
                             border_radius=ft.BorderRadius.only(top_right=8, bottom_right=8),
                         ),
-                        _along(
+                        along(
                             low,
                             ft.Container(
                                 height=_SHAFT - 4,
@@ -53,9 +53,9 @@ def gauge(share: float, band: tuple[float, float], label: str) -> ft.Control:
                                 ),
                             ),
                             high - low,
-                            _PARTS - high,
+                            PARTS - high,
                         ),
-                        _along(
+                        along(
                             ring,
                             ft.Container(
                                 width=_RING,
@@ -64,7 +64,7 @@ def gauge(share: float, band: tuple[float, float], label: str) -> ft.Control:
                                 border_radius=_RING / 2,
                             ),
                             0,
-                            _PARTS - ring,
+                            PARTS - ring,
                         ),
                     ],
                 ),
@@ -74,11 +74,4 @@ def gauge(share: float, band: tuple[float, float], label: str) -> ft.Control:
 
 
 def _parts(share: float) -> int:
-    return round(min(share / _SCALE, 1.0) * _PARTS)
-
-
-def _along(before: int, control: ft.Container, width: int, after: int) -> ft.Control:
-    """Place a control along the shaft; a width of 0 keeps the control's own."""
-    control.expand = width or None
-    gaps = (ft.Container(expand=before or None), ft.Container(expand=after or None))
-    return ft.Row(spacing=0, controls=[gaps[0], control, gaps[1]])
+    return round(min(share / _SCALE, 1.0) * PARTS)

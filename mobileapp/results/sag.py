@@ -83,6 +83,17 @@ def sag_view(end: End, entered: SagReading, texts: Texts) -> SagView:
     )
 
 
+def frequency_from_sag(end: End, entered: SagReading | None) -> Estimate | None:
+    """Return the frequency that a reading of sag tells, or None if it tells none."""
+    if entered is None or entered.travel.value <= 0 or not 0 < entered.sag.si < entered.travel.si:
+        return None
+    sag, travel = Measured(entered.sag.si, READING_SD), Measured(entered.travel.si, TRAVEL_SD)
+    try:
+        return _frequency(end, entered, sag, travel)
+    except NoSolutionError:
+        return None
+
+
 def _error(entered: SagReading, texts: Texts) -> str | None:
     if entered.travel.value <= 0:
         return texts("sag.error.travel")

@@ -9,6 +9,7 @@ import flet as ft
 from mobileapp import browser, theme
 from mobileapp.components.actions import Handler, icon_action, main_action, word_action
 from mobileapp.components.choice import choice
+from mobileapp.components.steps import steps
 from mobileapp.components.strip import strip
 from mobileapp.components.words import alarm, body, figure
 from mobileapp.format import Reading
@@ -64,7 +65,11 @@ def BounceScreen() -> ft.View:
         app.save_bounce(key, None)
 
     if over:
-        told = [_reading(app.texts, view), *_after(app.texts, view, again)]
+        told = [
+            _reading(app.texts, view),
+            *_after(app.texts, view, again),
+            steps(key, "bounce", app.texts),
+        ]
     elif taps:
         told = [_reading(app.texts, view)]
     else:

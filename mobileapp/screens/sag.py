@@ -10,6 +10,7 @@ from mobileapp.components.choice import choice
 from mobileapp.components.frame import card, screen
 from mobileapp.components.gauge import gauge
 from mobileapp.components.stepper import Stepper
+from mobileapp.components.steps import steps
 from mobileapp.components.words import alarm, body, figure, title
 from mobileapp.pictures.o_ring import o_ring_on_fork, o_ring_on_shock
 from mobileapp.records import ENDS, PLACES, End
@@ -37,6 +38,7 @@ def SagScreen() -> ft.View:
             *[SagEnd(app, key, end, key=end) for end in ENDS],
             body(app.texts("sag.maker")),
             main_action(app.texts("sag.next"), ft.Icons.TOUCH_APP, lambda: go(f"/bounce/{key}")),
+            steps(key, "sag", app.texts),
         ],
         back=(app.texts("back"), lambda: go("/")),
     )

@@ -138,6 +138,69 @@ TEXTS: Final = {
     "bounce.rhythm": (
         "Das ist der Rhythmus des Fahrers. Er kann bis zu ein Zehntel neben dem des Rads liegen."
     ),
+    "steps": "Weiter mit",
+    "steps.sag": "Sag",
+    "steps.bounce": "Wippen",
+    "steps.rebound": "Zugstufe",
+    "steps.trail": "Strecke",
+    "steps.balance": "Balance",
+    "rebound.title": "Zugstufe",
+    "rebound.how": (
+        "Fahrer auf dem Rad, Bremsen offen, ebener Boden. Den Sag markieren. Deutlich unter die "
+        "Marke drücken, plötzlich loslassen, und zusehen, wie es zurückkommt."
+    ),
+    "rebound.end": "Welches Ende",
+    "rebound.way": "Überschwung, gelesen am",
+    "rebound.way.ruler": "Maß",
+    "rebound.way.film": "Film",
+    "rebound.way.not_passed": "keiner",
+    "rebound.push": "Gedrückt, unter die Sag-Marke",
+    "rebound.overshoot": "Überschwung, über die Sag-Marke",
+    "rebound.frames": "Vom Loslassen bis durch die Marke",
+    "rebound.rate": "Bilder der Kamera in der Sekunde",
+    "rebound.not_passed": "Es kroch zur Sag-Marke zurück und ging nicht durch.",
+    "rebound.hand": (
+        "Eine Stoppuhr in der Hand kann das nicht: Ihr ± wäre so breit wie die ganze Skala."
+    ),
+    "rebound.clicks": "Klicks der Zugstufe von ganz zu",
+    "rebound.picture": (
+        "Das Rad über der Zeit: vom Druck hinauf durch die Sag-Marke, darüber und zurück."
+    ),
+    "rebound.missing.frames": (
+        "Noch keine Bilder. Zähle sie vom Loslassen bis zum Durchgang durch die Marke."
+    ),
+    "rebound.missing.frequency": (
+        "Ein Film braucht die Frequenz dieses Endes: erst Sag messen oder Wippen stoppen."
+    ),
+    "rebound.missing.push": "Noch kein Druck. Stell ein, wie weit unter der Marke es losging.",
+    "rebound.missing.overshoot": (
+        "Noch kein Überschwung. Stell ein, wie weit es über die Marke ging, oder wähle "
+        "„keiner“."
+    ),
+    "rebound.damping": "Dämpfungsgrad",
+    "rebound.at_least": "mindestens {ratio}",
+    "rebound.scale.low": "springt",
+    "rebound.scale.high": "kriecht",
+    "rebound.scale": "Dämpfungsgrad {ratio}; einmal überschwingen, dann Ruhe, ist 0,35 bis 0,6.",
+    "rebound.turn.close": "Zugstufe zu: mehr Dämpfung",
+    "rebound.turn.open": "Zugstufe auf: weniger Dämpfung",
+    "rebound.turn.keep": "So lassen: einmal überschwingen, dann Ruhe",
+    "rebound.turn.measure": "Langsam genug, vielleicht zu langsam: zwei Klicks auf, neu ablesen",
+    "rebound.sure": "Das ± lässt keinen Zweifel.",
+    "rebound.unsure": "Im Rahmen des ± kann es anders sein: noch einmal ablesen.",
+    "rebound.settled": "Das Schwingen des Rads schrumpft auf ein Drittel in",
+    "rebound.returned": "Zwei Drittel zurück ist das Laufrad nach",
+    "rebound.again": "Verstellt: neu ablesen",
+    "rebound.tries": "Ablesung {count} an diesem Ende",
+    "rebound.clicks.keep": (
+        "Nach den beiden Einstellungen passen {clicks} Klicks von ganz zu: so lassen."
+    ),
+    "rebound.clicks.open": (
+        "Nach den beiden Einstellungen: {turn} auf, bis {clicks} Klicks von ganz zu."
+    ),
+    "rebound.clicks.close": (
+        "Nach den beiden Einstellungen: {turn} zu, bis {clicks} Klicks von ganz zu."
+    ),
     "about.title": "Über die App, Vorsicht",
     "about.cautions": "Vorsicht",
     "about.caution.pressure": "Nie über den Druck gehen, der auf dem Bauteil steht.",

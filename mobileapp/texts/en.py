@@ -109,6 +109,62 @@ TEXTS: Final = {
     "bounce.rhythm": (
         "This is the rider's rhythm. A rider can keep one up to a tenth away from the bike's own."
     ),
+    # From one step to the next
+    "steps": "Go on with",
+    "steps.sag": "Sag",
+    "steps.bounce": "Bounce",
+    "steps.rebound": "Rebound",
+    "steps.trail": "Trail",
+    "steps.balance": "Balance",
+    # Rebound
+    "rebound.title": "Rebound",
+    "rebound.how": (
+        "Rider on, brakes off, ground level. Mark the sag. Push down well past the mark, let go "
+        "at once, and watch it come back."
+    ),
+    "rebound.end": "Which end",
+    "rebound.way": "Overshoot, read by",
+    "rebound.way.ruler": "ruler",
+    "rebound.way.film": "film",
+    "rebound.way.not_passed": "none",
+    "rebound.push": "Push, below the sag mark",
+    "rebound.overshoot": "Overshoot, above the sag mark",
+    "rebound.frames": "From letting go to passing the mark",
+    "rebound.rate": "Frames per second of the camera",
+    "rebound.not_passed": "It crept back to the sag mark and did not pass it.",
+    "rebound.hand": (
+        "A stopwatch in the hand can't do this: its ± would be as wide as the whole scale."
+    ),
+    "rebound.clicks": "Rebound clicks from closed",
+    "rebound.picture": (
+        "The wheel over time: from the push up past the sag mark, over it, and back."
+    ),
+    "rebound.missing.frames": "No frames yet. Count them from letting go to passing the mark.",
+    "rebound.missing.frequency": (
+        "A film needs this end's frequency: measure sag or time a bounce first."
+    ),
+    "rebound.missing.push": "No push yet. Set how far below the mark it was let go.",
+    "rebound.missing.overshoot": (
+        "No overshoot yet. Set how far above the mark it went, or choose “none”."
+    ),
+    "rebound.damping": "Damping ratio",
+    "rebound.at_least": "at least {ratio}",
+    "rebound.scale.low": "springy",
+    "rebound.scale.high": "slow",
+    "rebound.scale": "Damping ratio {ratio}; one overshoot, then settle, is 0.35 to 0.6.",
+    "rebound.turn.close": "Close rebound: more damping",
+    "rebound.turn.open": "Open rebound: less damping",
+    "rebound.turn.keep": "Keep it: one overshoot, then settle",
+    "rebound.turn.measure": "Slow enough, maybe too slow: open two clicks and read again",
+    "rebound.sure": "The ± leaves no doubt.",
+    "rebound.unsure": "Within the ± it may be otherwise: read once more.",
+    "rebound.settled": "The bike's swing shrinks to a third in",
+    "rebound.returned": "The wheel is two thirds back after",
+    "rebound.again": "I turned it: read again",
+    "rebound.tries": "Reading {count} at this end",
+    "rebound.clicks.keep": "By the two settings, {clicks} clicks from closed fits: keep it.",
+    "rebound.clicks.open": "By the two settings: open {turn}, to {clicks} clicks from closed.",
+    "rebound.clicks.close": "By the two settings: close {turn}, to {clicks} clicks from closed.",
     # About
     "about.title": "About and cautions",
     "about.cautions": "Cautions",

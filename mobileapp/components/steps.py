@@ -1,0 +1,38 @@
+"""The way from one step of a setup to any other: nothing blocks, filled steps feed later ones."""
+
+from functools import partial
+
+import flet as ft
+
+from mobileapp import theme
+from mobileapp.components.actions import word_action
+from mobileapp.texts import Texts
+
+STEPS = ("sag", "bounce", "rebound", "trail", "balance")
+
+
+def steps(setup: str, here: str, texts: Texts) -> ft.Control:
+    """Return the other steps of a setup.
+
+    Args:
+        setup: its key.
+        here: the step on the screen.
+        texts: words.
+    """
+    go = ft.context.page.navigate
+    return ft.Column(
+        spacing=0,
+        controls=[
+            ft.Text(texts("steps"), size=theme.SMALL, color=theme.QUIET),
+            ft.Row(
+                wrap=True,
+                spacing=theme.GAP,
+                run_spacing=theme.GAP,
+                controls=[
+                    word_action(texts(f"steps.{step}"), partial(go, f"/{step}/{setup}"), key=step)
+                    for step in STEPS
+                    if step != here
+                ],
+            ),
+        ],
+    )
