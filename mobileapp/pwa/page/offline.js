@@ -26,26 +26,23 @@ async function register() {
   const hadController = Boolean(serviceWorker.controller);
   serviceWorker.addEventListener("message", ({ data }) => hear(data));
   serviceWorker.addEventListener("controllerchange", () => {
-    if (hadController) location.reload(); // the person asked for the newer release
+    if (hadController) location.reload(); // another tab asked for the newer release
   });
   const registration = await serviceWorker.register("sw.js", { updateViaCache: "none" });
-  announce(registration.waiting);
+  if (registration.waiting) announce(registration.waiting);
+  const follow = (worker) =>
+    worker?.addEventListener("statechange", () => {
+      if (worker.state === "installed" && registration.active) announce(worker);
+      if (worker.state === "activated") report("ready");
+    });
   registration.addEventListener("updatefound", () => follow(registration.installing));
-  if (registration.installing) follow(registration.installing);
+  follow(registration.installing);
   if (registration.active) registration.active.postMessage({ kind: "complete?" });
   setInterval(() => registration.update().catch(() => {}), UPDATE_EVERY_MS);
 }
 
-function follow(worker) {
-  worker.addEventListener("statechange", () => {
-    if (worker.state === "installed") announce(worker);
-    if (worker.state === "activated") report("ready");
-  });
-}
-
-/** A newer release is complete and waits, if this page is served by an older one. */
+/** A newer release is complete and waits. */
 function announce(worker) {
-  if (!worker || !navigator.serviceWorker.controller) return;
   waiting = worker;
   toPython({ kind: "update" });
 }
@@ -67,7 +64,10 @@ function report(state, more = {}) {
 }
 
 onPython("offline?", () => last && toPython(last));
-onPython("update", () => waiting?.postMessage({ kind: "take over" }));
+onPython("update", () => {
+  waiting?.addEventListener("statechange", () => location.reload());
+  waiting?.postMessage({ kind: "take over" });
+});
 onPython("persist", () => navigator.storage?.persist?.());
 
 // Before the first paint, on a first visit, show how much has arrived.

@@ -18,7 +18,10 @@ const byAddress = new Map(FILES.map((file) => [address(file.path), file]));
 const TOTAL = FILES.reduce((sum, file) => sum + file.bytes, 0);
 
 self.addEventListener("install", (event) => event.waitUntil(keepAll()));
-self.addEventListener("activate", (event) => event.waitUntil(dropOthers()));
+self.addEventListener("activate", (event) =>
+  // A page that isn't claimed doesn't count as open, and a newer release would not wait for it.
+  event.waitUntil(dropOthers().then(() => self.clients.claim())),
+);
 self.addEventListener("fetch", (event) => event.respondWith(answer(event.request)));
 self.addEventListener("message", (event) => {
   if (event.data.kind === "take over") self.skipWaiting();

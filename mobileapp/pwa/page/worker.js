@@ -40,8 +40,13 @@ new PerformanceObserver((list) => {
 
 let pyodide;
 
-// The interpreter reports a missing or damaged part of its own to nobody.
-self.addEventListener("unhandledrejection", ({ reason }) => pyodide || explain(reason));
+// The interpreter waits for ever for a part of its own that is missing or damaged, and tells nobody.
+const instantiate = WebAssembly.instantiateStreaming;
+WebAssembly.instantiateStreaming = (source, imports) =>
+  instantiate.call(WebAssembly, source, imports).catch((error) => {
+    explain(error);
+    throw error;
+  });
 
 async function start() {
   const pack = load("app.pack");
