@@ -130,7 +130,15 @@ MESSAGES: Final[dict[str, str]] = {
     "area_ratio": "The negative side has half to all of the piston's area.",
     "exponent": "The exponent of air lies between 1 and 1.4.",
     "joined_at": "The chambers join near full extension: within a quarter of the chamber's length.",
-    "temperature": "That temperature is no riding weather: enter degrees Celsius.",
+    "temperature": "That temperature is no riding weather: check the unit.",
+    "no_pressure_left": "No pressure would be left on the gauge: check the readings.",
+    "hose_filled": (
+        "The reading dropped because the pump's hose filled; the hiss on taking it off is the "
+        "hose's air. Set the pressure with the pump attached."
+    ),
+    "pressure_lost": (
+        "More air is gone than the pump's hose explains: don't ride it before the leak is found."
+    ),
     "topped_out": (
         "The spring carries more than the load even when extended: reduce pressure or preload."
     ),
@@ -151,9 +159,24 @@ MESSAGES: Final[dict[str, str]] = {
         "volume spacer or another spring is needed."
     ),
     "limit_unknown": "Check this against the maximum printed on the unit before you pump.",
+    "limit_near": (
+        "The ± reaches past the printed maximum of {limit_pa}: stop there, whatever the sag."
+    ),
     "large_step": "A large change: make this much, measure again, and go on from there.",
-    "equalise": "Cycle slowly through the first third of travel a few times, then measure.",
+    "within_doubt": "Sag and target can't be told apart within the ±: leave it, or read again.",
+    "equalise": (
+        "After the change cycle slowly through the first third of travel a few times, wait a "
+        "minute, then measure."
+    ),
     "no_coil_fits": "No coil at hand reaches the target with little preload; this is the nearest.",
+    "readings_too_close": (
+        "The two pressures are too close to tell the chamber's length: go on from the latest "
+        "reading, by one more small step."
+    ),
+    "no_chamber": (
+        "These readings don't tell the chamber's length: go on from the latest one, by one more "
+        "small step."
+    ),
 }
 
 _SUFFIX_UNITS: Final = {

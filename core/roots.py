@@ -37,7 +37,8 @@ def rising_root(
         low, high = np.where(below, position, low), np.where(below, high, position)
         middle = (low + high) / 2.0
         rising = (slope > 0.0) & (step < _NEWTON_STEPS)
-        proposed = position - np.divide(value, slope, out=position - middle, where=rising)
+        newton = value / np.where(rising, slope, 1.0)
+        proposed = np.where(rising, position - newton, middle)
         # A step within rounding may fall just out of the bracket: that is no reason to halve it.
         solved = np.abs(proposed - position) <= close
         if solved.all():
