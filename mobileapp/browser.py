@@ -43,11 +43,11 @@ class Offline:
 class TapClock:
     """The browser's own times of touches, matched to taps by position."""
 
-    _NEAR: Final = 2.0  # [px] Flet rounds positions
-    _KEPT: Final = 64  # stamps of touches that were no taps on the pad fall out at the far end
+    _NEAR: Final = 16.0  # [px] a third of a fingertip; Flet's positions are off by up to 3
+    _LATE: Final = 1.0  # [s] a touch that was no tap until then never will be
 
     def __init__(self) -> None:
-        self._stamps: deque[tuple[float, float, float]] = deque(maxlen=self._KEPT)
+        self._stamps: deque[tuple[float, float, float]] = deque()
 
     def start(self) -> None:
         """Ask the page to stamp touches from now on."""
@@ -73,6 +73,8 @@ class TapClock:
 
     def add(self, seconds: float, x: float, y: float) -> None:
         """Note a stamp from the page."""
+        while self._stamps and seconds - self._stamps[0][0] > self._LATE:
+            self._stamps.popleft()
         self._stamps.append((seconds, x, y))
 
 

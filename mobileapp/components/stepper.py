@@ -95,7 +95,7 @@ def Stepper(
     return ft.Column(
         spacing=theme.GAP,
         controls=[
-            ft.Text(name, size=theme.SMALL, color=theme.QUIET),
+            ft.Text(f"{name}, {amount.unit}", size=theme.SMALL, color=theme.QUIET),
             ft.Row(
                 spacing=theme.GAP,
                 controls=[
@@ -111,14 +111,13 @@ def Stepper(
                             # The name above is for the eye; this one is for screen readers.
                             label=name,
                             label_style=ft.TextStyle(size=1, color=ft.Colors.TRANSPARENT),
-                            suffix=ft.Text(amount.unit, size=theme.BODY, color=theme.QUIET),
                             on_change=type_in,
                             on_blur=lambda: set_draft(""),
                             keyboard_type=ft.KeyboardType.NUMBER,
                             text_align=ft.TextAlign.CENTER,
                             text_size=30,
                             border=ft.InputBorder.NONE,
-                            content_padding=ft.Padding.symmetric(horizontal=theme.GAP),
+                            content_padding=0,
                         ),
                     ),
                     button(texts("stepper.more", name=name), ft.Icons.ADD, 1),
