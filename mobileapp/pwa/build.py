@@ -79,7 +79,7 @@ def make_site() -> dict[str, bytes]:
     wheels = {**fetch(pins), "numpy": fetch_numpy()}
     sources = app_sources()
     with step("Compiling Python for the browser"):
-        python = build_python(wheels)
+        python = build_python(wheels, sources)
     with step("Assembling the web client"):
         client = build_client(wheels["flet-web"], sources)
     page = _page()

