@@ -3,10 +3,12 @@
 import flet as ft
 
 from mobileapp.screens.about import AboutScreen
+from mobileapp.screens.balance import BalanceScreen
 from mobileapp.screens.bounce import BounceScreen
 from mobileapp.screens.home import HomeScreen
 from mobileapp.screens.rebound import ReboundScreen
 from mobileapp.screens.sag import SagScreen
+from mobileapp.screens.trail import TrailScreen
 from mobileapp.shared import StateContext
 from mobileapp.state import AppState
 
@@ -25,6 +27,8 @@ def App(state: AppState) -> ft.Control:
                         ft.Route(path="sag/:key", component=SagScreen),
                         ft.Route(path="bounce/:key", component=BounceScreen),
                         ft.Route(path="rebound/:key", component=ReboundScreen),
+                        ft.Route(path="trail/:key", component=TrailScreen),
+                        ft.Route(path="balance/:key", component=BalanceScreen),
                     ],
                 )
             ],

@@ -16,6 +16,9 @@ from mobileapp.record_fields import RecordError, check, pair, to_amount, to_numb
 from mobileapp.release_reading import MOST_TRIES, ReleaseReading
 from mobileapp.release_reading import from_record as release_from_record
 from mobileapp.release_reading import to_record as release_to_record
+from mobileapp.trail_plan import TrailPlan
+from mobileapp.trail_plan import from_record as trail_from_record
+from mobileapp.trail_plan import to_record as trail_to_record
 from mobileapp.units import Amount
 
 FORMAT: Final = 1
@@ -90,6 +93,7 @@ class Setup:
         bounce: the last bounce test that was kept.
         shown: the results as they were shown last, in words, for lists.
         releases: release tests by end, the latest one last.
+        trail: the day's bumps and speeds, if they were entered.
     """
 
     key: str
@@ -99,6 +103,7 @@ class Setup:
     bounce: BounceRun | None = None
     shown: tuple[str, ...] = ()
     releases: Mapping[End, tuple[ReleaseReading, ...]] = field(default_factory=dict)
+    trail: TrailPlan | None = None
 
     def reading(self, end: End) -> SagReading:
         """Return the sag reading of an end, or the first guess to step away from."""
@@ -158,6 +163,8 @@ def to_json(setup: Setup) -> str:
             "every": setup.bounce.taps_every,
             "page_clock": setup.bounce.page_clock,
         }
+    if setup.trail:
+        record["trail"] = trail_to_record(setup.trail)
     return json.dumps(record, ensure_ascii=False, separators=(",", ":"))
 
 
@@ -190,6 +197,7 @@ def _setup(record: Mapping[str, Any]) -> Setup:
         bounce=_bounce(record["bounce"]) if "bounce" in record else None,
         shown=tuple(to_text(line) for line in record["shown"]),
         releases=_releases(record.get("releases", {})),  # setups of the first days have none
+        trail=trail_from_record(record["trail"]) if "trail" in record else None,
     )
 
 

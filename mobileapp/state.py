@@ -25,12 +25,15 @@ from mobileapp.records import (
 from mobileapp.release_reading import NO_FRAMES, NO_OVERSHOOT
 from mobileapp.store import Store, StoreError, open_store
 from mobileapp.texts import Texts
+from mobileapp.trail_plan import Bump, TrailPlan
 from mobileapp.units import SYSTEMS, Amount
 
 if TYPE_CHECKING:  # they need numpy, which arrives after the first paint
+    from mobileapp.results.balance import BalanceView
     from mobileapp.results.bounce import BounceView
     from mobileapp.results.rebound import ReboundView
     from mobileapp.results.sag import SagView
+    from mobileapp.results.trail import BumpView
 
 RECORD_PREFIX: Final = "setup/"
 
@@ -128,6 +131,30 @@ class AppState:
         from mobileapp.results.rebound import rebound_view  # noqa: PLC0415 - numpy comes late
 
         return rebound_view(self.setup(key), end, self.texts)
+
+    def balance_view(self, key: str) -> "BalanceView | None":
+        """Return how the ends go together; None while the calculator isn't there."""
+        if not self.calculator:
+            return None
+        from mobileapp.results.balance import balance_view  # noqa: PLC0415 - numpy comes late
+
+        return balance_view(self.setup(key), self.texts)
+
+    def bump_view(self, key: str, bump: Bump) -> "BumpView | None":
+        """Return what to show for a row of bumps; None while the calculator isn't there."""
+        if not self.calculator:
+            return None
+        from mobileapp.results.trail import bump_view  # noqa: PLC0415 - numpy comes late
+
+        return bump_view(self.setup(key), self.trail(key), bump, self.texts, self.units)
+
+    def trail(self, key: str) -> TrailPlan:
+        """Return the day's trail, or the first guess to step away from."""
+        return self.setup(key).trail or TrailPlan()
+
+    def save_trail(self, key: str, plan: TrailPlan) -> None:
+        """Keep the day's trail with a setup."""
+        self.save(replace(self.setup(key), trail=plan))
 
     def save_reading(self, key: str, end: End, **changes: Amount) -> None:
         """Change values of a reading, and keep it."""

@@ -9,6 +9,7 @@ from dataclasses import dataclass
 from typing import Final, Literal
 
 from core import units as si
+from core.constants import STANDARD_GRAVITY
 
 
 @dataclass(frozen=True)
@@ -44,6 +45,7 @@ UNITS: Final = {
         Unit("km/h", si.KMH, 1.0, 0),
         Unit("mph", si.MPH, 1.0, 0),
         Unit("m/s", 1.0, 0.5, 1),
+        Unit("g", STANDARD_GRAVITY, 0.1, 1),
         Unit("°", si.DEGREE, 0.5, 1),
         Unit("%", 0.01, 1.0, 0),
         Unit("Hz", 1.0, 0.1, 1),

@@ -43,7 +43,6 @@ def _option(
 ) -> ft.Control:
     return ft.Semantics(
         key=key,
-        label=word,
         button=True,
         selected=chosen,
         container=True,

@@ -1,11 +1,9 @@
 """The way from one step of a setup to any other: nothing blocks, filled steps feed later ones."""
 
-from functools import partial
-
 import flet as ft
 
 from mobileapp import theme
-from mobileapp.components.actions import word_action
+from mobileapp.components.actions import Handler, word_action
 from mobileapp.texts import Texts
 
 STEPS = ("sag", "bounce", "rebound", "trail", "balance")
@@ -20,6 +18,10 @@ def steps(setup: str, here: str, texts: Texts) -> ft.Control:
         texts: words.
     """
     go = ft.context.page.navigate
+
+    def to(step: str) -> Handler:
+        return lambda: go(f"/{step}/{setup}")
+
     return ft.Column(
         spacing=0,
         controls=[
@@ -29,7 +31,7 @@ def steps(setup: str, here: str, texts: Texts) -> ft.Control:
                 spacing=theme.GAP,
                 run_spacing=theme.GAP,
                 controls=[
-                    word_action(texts(f"steps.{step}"), partial(go, f"/{step}/{setup}"), key=step)
+                    word_action(texts(f"steps.{step}"), to(step), key=step)
                     for step in STEPS
                     if step != here
                 ],

@@ -43,8 +43,7 @@ class ReboundView:
         turn: which way to turn the adjuster.
         advice: the same in words.
         sure: whether the ± leaves no doubt, in words.
-        settled: time constant of the body's swing, if the frequency is known.
-        returned: time constant of the wheel's return, likewise.
+        times: how quickly body and wheel come to rest, if the frequency is known, in words.
         clicks: what two tried settings tell, in words; empty with fewer.
         notes: further sentences.
     """
@@ -57,8 +56,7 @@ class ReboundView:
     turn: Turn = "measure"
     advice: str = ""
     sure: str = ""
-    settled: Reading | None = None
-    returned: Reading | None = None
+    times: tuple[str, ...] = ()
     clicks: str = ""
     notes: tuple[str, ...] = ()
 
@@ -71,12 +69,11 @@ def rebound_view(setup: Setup, end: End, texts: Texts) -> ReboundView:
     if missing:
         return ReboundView(missing=texts(missing))
     try:
-        damping = _damping(setup, end, reading)
+        damping = damping_of(setup, end, reading)
     except SetupError as error:
         return ReboundView(missing=told(error, texts))
     advice = advise(damping)
     ratio = damping.ratio
-    settled, returned = _times(setup, end, ratio)
     return ReboundView(
         damping=ratio and shown(ratio, "", comma=texts.comma),
         bound="" if ratio else texts("rebound.at_least", ratio=_text(damping.at_least, texts)),
@@ -84,8 +81,7 @@ def rebound_view(setup: Setup, end: End, texts: Texts) -> ReboundView:
         turn=advice.turn,
         advice=texts(f"rebound.turn.{advice.turn}"),
         sure=texts("rebound.sure" if advice.sure else "rebound.unsure"),
-        settled=settled and shown(settled, "s", comma=texts.comma),
-        returned=returned and shown(returned, "s", comma=texts.comma),
+        times=_times(setup, end, ratio, texts),
         clicks=_clicks(setup, end, tries, texts),
         notes=tuple(told(note, texts) for note in damping.notes),
     )
@@ -103,7 +99,12 @@ def _missing(setup: Setup, end: End, reading: ReleaseReading) -> str:
     return ""
 
 
-def _damping(setup: Setup, end: End, reading: ReleaseReading) -> Damping:
+def damping_of(setup: Setup, end: End, reading: ReleaseReading) -> Damping:
+    """Return the damping that a release test of an end tells.
+
+    Raises:
+        SetupError: it tells none, with the sentence why.
+    """
     if reading.way == "film":
         frequency = end_frequency(setup, end)
         if frequency is None:
@@ -117,20 +118,21 @@ def _damping(setup: Setup, end: End, reading: ReleaseReading) -> Damping:
     )
 
 
-def _times(
-    setup: Setup, end: End, ratio: Estimate | None
-) -> tuple[Estimate, Estimate] | tuple[None, None]:
+def _times(setup: Setup, end: End, ratio: Estimate | None, texts: Texts) -> tuple[str, ...]:
     frequency = end_frequency(setup, end)
     if frequency is None or ratio is None or ratio.low <= 0:
-        return None, None
-    damping = ratio.as_measured()
+        return ()
+    times = (("settled", settling_time), ("returned", wheel_return_time))
     try:
-        return (
-            propagate(settling_time, frequency.measured, damping),
-            propagate(wheel_return_time, frequency.measured, damping),
-        )
+        estimates = [
+            (name, propagate(time, frequency.measured, ratio.as_measured())) for name, time in times
+        ]
     except SetupError:  # the ± reaches down to no damping at all, which never settles
-        return None, None
+        return ()
+    return tuple(
+        texts(f"rebound.{name}", time=str(shown(time, "s", comma=texts.comma)))
+        for name, time in estimates
+    )
 
 
 def _clicks(setup: Setup, end: End, tries: tuple[ReleaseReading, ...], texts: Texts) -> str:
@@ -143,7 +145,7 @@ def _clicks(setup: Setup, end: End, tries: tuple[ReleaseReading, ...], texts: Te
         settings = [
             TriedSetting(reading.clicks.value, ratio.as_measured())
             for reading in (before, now)
-            if (ratio := _damping(setup, end, reading).ratio)
+            if (ratio := damping_of(setup, end, reading).ratio)
         ]
         if len(settings) < 2:  # noqa: PLR2004 - likewise
             return ""

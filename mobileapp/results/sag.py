@@ -83,6 +83,14 @@ def sag_view(end: End, entered: SagReading, texts: Texts) -> SagView:
     )
 
 
+def share_of_travel(entered: SagReading | None) -> Measured | None:
+    """Return sag as a share of travel, or None if nothing possible has been read."""
+    if entered is None or not 0 < entered.sag.si < entered.travel.si:
+        return None
+    sag, travel = Measured(entered.sag.si, READING_SD), Measured(entered.travel.si, TRAVEL_SD)
+    return propagate(lambda s, t: s / t, sag, travel).as_measured()
+
+
 def frequency_from_sag(end: End, entered: SagReading | None) -> Estimate | None:
     """Return the frequency that a reading of sag tells, or None if it tells none."""
     if entered is None or entered.travel.value <= 0 or not 0 < entered.sag.si < entered.travel.si:

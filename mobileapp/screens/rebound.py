@@ -127,7 +127,7 @@ def _result(app: AppState, setup: str, end: End, view: "ReboundView | None") -> 
                 app.texts("rebound.scale", ratio=ratio),
             ),
             *([title(view.clicks)] if view.clicks else []),
-            *_times(app, view),
+            *[body(time) for time in view.times],
             *[body(note) for note in view.notes],
         ),
         main_action(
@@ -137,15 +137,4 @@ def _result(app: AppState, setup: str, end: End, view: "ReboundView | None") -> 
             calls=False,
         ),
         body(app.texts("rebound.tries", count=str(len(app.setup(setup).releases[end])))),
-    ]
-
-
-def _times(app: AppState, view: "ReboundView") -> list[ft.Control]:
-    if view.settled is None or view.returned is None:
-        return []
-    return [
-        body(app.texts("rebound.settled")),
-        figure(view.settled, theme.TITLE),
-        body(app.texts("rebound.returned")),
-        figure(view.returned, theme.TITLE),
     ]

@@ -174,8 +174,7 @@ TEXTS: Final = {
     ),
     "rebound.missing.push": "Noch kein Druck. Stell ein, wie weit unter der Marke es losging.",
     "rebound.missing.overshoot": (
-        "Noch kein Überschwung. Stell ein, wie weit es über die Marke ging, oder wähle "
-        "„keiner“."
+        "Noch kein Überschwung. Stell ein, wie weit es über die Marke ging, oder wähle „keiner“."
     ),
     "rebound.damping": "Dämpfungsgrad",
     "rebound.at_least": "mindestens {ratio}",
@@ -188,8 +187,8 @@ TEXTS: Final = {
     "rebound.turn.measure": "Langsam genug, vielleicht zu langsam: zwei Klicks auf, neu ablesen",
     "rebound.sure": "Das ± lässt keinen Zweifel.",
     "rebound.unsure": "Im Rahmen des ± kann es anders sein: noch einmal ablesen.",
-    "rebound.settled": "Das Schwingen des Rads schrumpft auf ein Drittel in",
-    "rebound.returned": "Zwei Drittel zurück ist das Laufrad nach",
+    "rebound.settled": "Das Schwingen des Rads schrumpft auf ein Drittel in {time}.",
+    "rebound.returned": "Zwei Drittel zurück ist das Laufrad nach {time}.",
     "rebound.again": "Verstellt: neu ablesen",
     "rebound.tries": "Ablesung {count} an diesem Ende",
     "rebound.clicks.keep": (
@@ -200,6 +199,96 @@ TEXTS: Final = {
     ),
     "rebound.clicks.close": (
         "Nach den beiden Einstellungen: {turn} zu, bis {clicks} Klicks von ganz zu."
+    ),
+    "trail.title": "Strecke",
+    "trail.how": (
+        "Die wiederkehrenden Wellen des Tages: Bremswellen, Wurzeln, Rippen. Den Abstand von "
+        "Kamm zu Kamm abschreiten, die Höhe vom Tal zum Kamm schätzen."
+    ),
+    "trail.slowest": "Langsamste Fahrt darüber",
+    "trail.fastest": "Schnellste Fahrt darüber",
+    "trail.bump": "Wellen {count}",
+    "trail.spacing": "Abstand",
+    "trail.height": "Höhe",
+    "trail.add": "Auch andere Wellen",
+    "trail.remove": "Wellen {count} entfernen",
+    "trail.numbers": "Zahlen",
+    "trail.at": "bei {speed}",
+    "trail.missing.zero": "Abstand, Höhe und Geschwindigkeit müssen größer als null sein.",
+    "trail.missing.order": "Die schnellste Fahrt muss schneller sein als die langsamste.",
+    "trail.missing.frequency": (
+        "Das braucht die Frequenz des Rads: erst Sag messen oder Wippen stoppen."
+    ),
+    "trail.says.follows_follows": (
+        "{end}: geht mit diesen Wellen auf und ab; am stärksten schaukeln sie bei {resonant}."
+    ),
+    "trail.says.follows_resonates": (
+        "{end}: diese Wellen schaukeln am stärksten bei {resonant}, und so schnell fährst du."
+    ),
+    "trail.says.follows_filters": (
+        "{end}: um {resonant} schaukeln diese Wellen; über {filtering} werden sie geglättet."
+    ),
+    "trail.says.resonates_resonates": (
+        "{end}: bei diesem Tempo schaukeln die Wellen am stärksten. Erst über {filtering} werden "
+        "sie geglättet."
+    ),
+    "trail.says.resonates_filters": (
+        "{end}: langsam, nahe {resonant}, schaukeln die Wellen; über {filtering} werden sie "
+        "geglättet."
+    ),
+    "trail.says.filters_filters": (
+        "{end}: glättet diese Wellen bei jedem dieser Tempi; {percent} % kommen bei {fast} durch."
+    ),
+    "trail.lifts": "Ab {speed} kommt das Laufrad nicht mehr nach und hebt ab.",
+    "trail.assumed.rebound": "Die Zugdämpfung ist angenommen wie üblich: miss sie.",
+    "trail.assumed.compression": "Die Druckdämpfung ist angenommen: zwei Fünftel der Zugdämpfung.",
+    "trail.row.forcing": "Wellen in der Sekunde",
+    "trail.row.through": "Kommt durch",
+    "trail.row.drop": "Fährt tiefer um",
+    "trail.row.recovered": "Zurück vor der nächsten Welle",
+    "trail.row.packed": "Bleibt unten, vom Hub",
+    "trail.row.stroke": "Hub auf und ab vom Sag",
+    "trail.row.wheel_speed": "Tempo des Laufrads, Spitze",
+    "trail.row.wheel_acceleration": "Beschleunigung des Laufrads, Spitze",
+    "trail.row.shaft_speed": "Tempo der Stange, Spitze",
+    "trail.row.circuit": "Dämpfung, die arbeitet",
+    "trail.row.contact": "Kleinste Last am Boden",
+    "trail.circuit.low": "langsame",
+    "trail.circuit.crossover": "beide",
+    "trail.circuit.high": "schnelle",
+    "trail.chart": (
+        "Wie viel von den Wellen bei welchem Tempo durchkommt. Die Tempi des Tages liegen "
+        "zwischen den senkrechten Linien; bei 100 % wird nichts geglättet."
+    ),
+    "balance.title": "Balance",
+    "balance.first": "Was zuerst kommt",
+    "balance.do.front_sag": "Den Sag vorn ins Ziel bringen",
+    "balance.do.rear_sag": "Den Sag hinten ins Ziel bringen",
+    "balance.do.frequency": "Die Frequenzen der Enden zusammenbringen",
+    "balance.do.damping": "Die Zugstufen der Enden zusammenbringen",
+    "balance.do.measure_sag": "Sag an beiden Enden messen",
+    "balance.do.measure_rebound": "Zugstufe an beiden Enden messen",
+    "balance.do.measure_again": "Noch einmal ablesen: das ± lässt es offen",
+    "balance.do.nothing": "Nichts: die Enden passen zusammen",
+    "balance.sag": "Sag",
+    "balance.frequency": "Frequenz, vorn durch hinten",
+    "balance.damping": "Zugdämpfung, vorn durch hinten",
+    "balance.unknown": "nicht gemessen",
+    "balance.sag.on_target": "im Ziel",
+    "balance.sag.too_little": "zu wenig",
+    "balance.sag.too_much": "zu viel",
+    "balance.sag.unclear": "etwa am Rand",
+    "balance.is.balanced": "sie passen zusammen",
+    "balance.is.front_higher": "vorn ist straffer für seine Last",
+    "balance.is.rear_higher": "hinten ist straffer für seine Last",
+    "balance.is.unclear": "das ± lässt es offen",
+    "balance.damped.balanced": "sie passen zusammen",
+    "balance.damped.front_higher": "vorn ist stärker gedämpft",
+    "balance.damped.rear_higher": "hinten ist stärker gedämpft",
+    "balance.damped.unclear": "das ± lässt es offen",
+    "balance.practice": (
+        "Die Bereiche sind allgemeine Praxis: Frequenz 1,0 bis 1,3, Dämpfung 0,75 bis 1,35, vorn "
+        "durch hinten."
     ),
     "about.title": "Über die App, Vorsicht",
     "about.cautions": "Vorsicht",

@@ -158,13 +158,102 @@ TEXTS: Final = {
     "rebound.turn.measure": "Slow enough, maybe too slow: open two clicks and read again",
     "rebound.sure": "The ± leaves no doubt.",
     "rebound.unsure": "Within the ± it may be otherwise: read once more.",
-    "rebound.settled": "The bike's swing shrinks to a third in",
-    "rebound.returned": "The wheel is two thirds back after",
+    "rebound.settled": "The bike's swing shrinks to a third in {time}.",
+    "rebound.returned": "The wheel is two thirds back after {time}.",
     "rebound.again": "I turned it: read again",
     "rebound.tries": "Reading {count} at this end",
     "rebound.clicks.keep": "By the two settings, {clicks} clicks from closed fits: keep it.",
     "rebound.clicks.open": "By the two settings: open {turn}, to {clicks} clicks from closed.",
     "rebound.clicks.close": "By the two settings: close {turn}, to {clicks} clicks from closed.",
+    # Trail
+    "trail.title": "Trail",
+    "trail.how": (
+        "The day's repeated bumps: braking bumps, roots, ripples. Pace out their spacing from "
+        "crest to crest, judge their height from trough to crest."
+    ),
+    "trail.slowest": "Slowest over them",
+    "trail.fastest": "Fastest over them",
+    "trail.bump": "Bumps {count}",
+    "trail.spacing": "Spacing",
+    "trail.height": "Height",
+    "trail.add": "Other bumps, too",
+    "trail.remove": "Remove bumps {count}",
+    "trail.numbers": "Numbers",
+    "trail.at": "at {speed}",
+    "trail.missing.zero": "Spacing, height and speed must be more than zero.",
+    "trail.missing.order": "The fastest speed must be more than the slowest.",
+    "trail.missing.frequency": (
+        "This needs the bike's frequency: measure sag or time a bounce first."
+    ),
+    "trail.says.follows_follows": (
+        "{end}: it goes up and down with these bumps; they would rock it most at {resonant}."
+    ),
+    "trail.says.follows_resonates": (
+        "{end}: these bumps rock it most at {resonant}, and you ride near that."
+    ),
+    "trail.says.follows_filters": (
+        "{end}: around {resonant} these bumps rock it; above {filtering} it smooths them."
+    ),
+    "trail.says.resonates_resonates": (
+        "{end}: at these speeds the bumps rock it most. Only above {filtering} it smooths them."
+    ),
+    "trail.says.resonates_filters": (
+        "{end}: slow, near {resonant}, the bumps rock it; above {filtering} it smooths them."
+    ),
+    "trail.says.filters_filters": (
+        "{end}: it smooths these bumps at all these speeds; {percent} % get through at {fast}."
+    ),
+    "trail.lifts": "From {speed} on the wheel can't follow and leaves the ground.",
+    "trail.assumed.rebound": "Rebound damping is assumed as usual: measure it to be sure.",
+    "trail.assumed.compression": "Compression damping is assumed at two fifths of rebound.",
+    "trail.row.forcing": "Bumps a second",
+    "trail.row.through": "Gets through",
+    "trail.row.drop": "Rides lower by",
+    "trail.row.recovered": "Back before the next bump",
+    "trail.row.packed": "Packed down, of a stroke",
+    "trail.row.stroke": "Stroke, up and down from sag",
+    "trail.row.wheel_speed": "Wheel speed, peak",
+    "trail.row.wheel_acceleration": "Wheel acceleration, peak",
+    "trail.row.shaft_speed": "Shaft speed, peak",
+    "trail.row.circuit": "Damping that works",
+    "trail.row.contact": "Least load on the ground",
+    "trail.circuit.low": "low speed",
+    "trail.circuit.crossover": "both",
+    "trail.circuit.high": "high speed",
+    "trail.chart": (
+        "How much of the bumps gets through at each speed. The day's speeds lie between the "
+        "upright lines; at 100 % nothing is smoothed."
+    ),
+    # Balance
+    "balance.title": "Balance",
+    "balance.first": "What to do first",
+    "balance.do.front_sag": "Bring the front's sag to its target",
+    "balance.do.rear_sag": "Bring the rear's sag to its target",
+    "balance.do.frequency": "Bring the ends' frequencies together",
+    "balance.do.damping": "Bring the ends' rebound together",
+    "balance.do.measure_sag": "Measure sag at both ends",
+    "balance.do.measure_rebound": "Measure rebound at both ends",
+    "balance.do.measure_again": "Read again: the ± leaves it open",
+    "balance.do.nothing": "Nothing: the ends go together",
+    "balance.sag": "Sag",
+    "balance.frequency": "Frequency, front over rear",
+    "balance.damping": "Rebound damping, front over rear",
+    "balance.unknown": "not measured",
+    "balance.sag.on_target": "on target",
+    "balance.sag.too_little": "too little",
+    "balance.sag.too_much": "too much",
+    "balance.sag.unclear": "about at the edge",
+    "balance.is.balanced": "they go together",
+    "balance.is.front_higher": "the front is stiffer for its load",
+    "balance.is.rear_higher": "the rear is stiffer for its load",
+    "balance.is.unclear": "the ± leaves it open",
+    "balance.damped.balanced": "they go together",
+    "balance.damped.front_higher": "the front is damped more",
+    "balance.damped.rear_higher": "the rear is damped more",
+    "balance.damped.unclear": "the ± leaves it open",
+    "balance.practice": (
+        "Bands are common practice: frequency 1.0 to 1.3, damping 0.75 to 1.35, front over rear."
+    ),
     # About
     "about.title": "About and cautions",
     "about.cautions": "Cautions",

@@ -64,8 +64,7 @@ def test_a_film_with_a_frequency_tells_damping():
     view = rebound_view(setup, "front", ENGLISH)
     # 40 frames at 240/s are 1/6 s; at 2.7 Hz that is U = 2.8 rad, between ζ = 0.6 and 0.7.
     assert 0.5 < float(view.damping.value) < 0.75
-    assert view.settled.unit == "s"
-    assert view.returned.unit == "s"
+    assert len(view.times) == 2
 
 
 def test_what_did_not_pass_is_a_bound():
