@@ -30,7 +30,7 @@ AREA_RATIO: Final = (0.85, 1.0)  # [-] r
 EXPONENT: Final = (1.2, 1.4)  # [-] n; conduction theory gives 1.32 to 1.39, mixing lowers it
 JOINED_SHARE: Final = (0.0, 0.05)  # [-] sₚ per full stroke
 
-STEEPNESS: Final = Measured(1.05, 0.14)  # [-] 1 for a coil, 0.8 to 1.4 for air with these chambers
+STEEPNESS: Final = Measured(1.07, 0.16)  # [-] 1 for a coil, 0.8 to 1.4 for air with these chambers
 
 
 @dataclass(frozen=True)
