@@ -130,6 +130,7 @@ MESSAGES: Final[dict[str, str]] = {
     "area_ratio": "The negative side has half to all of the piston's area.",
     "exponent": "The exponent of air lies between 1 and 1.4.",
     "joined_at": "The chambers join near full extension: within a quarter of the chamber's length.",
+    "steepness": "The steepness of a spring lies between 0.1 and 10; that of a coil is 1.",
     "temperature": "That temperature is no riding weather: check the unit.",
     "no_pressure_left": "No pressure would be left on the gauge: check the readings.",
     "hose_filled": (

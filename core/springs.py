@@ -9,7 +9,7 @@ from abc import ABC, abstractmethod
 
 import numpy as np
 
-from core.checks import FloatArray, Quantity, positive, require
+from core.checks import SMALLEST, FloatArray, Quantity, positive, require
 from core.constants import STANDARD_GRAVITY
 from core.errors import NoSolutionError
 from core.geometry import WheelPath, force_at_wheel, rate_at_wheel
@@ -184,7 +184,7 @@ def loaded_frequency(spring: Spring, path: WheelPath, stroke: Quantity) -> Quant
     Source: f = √(k/m)/2π with m = W/g₀; any vibration text.
     """
     load = wheel_load(spring, path, stroke)
-    require(np.greater(load, 0.0), "topped_out", "stroke", NoSolutionError)
+    require(np.greater(load, SMALLEST), "topped_out", "stroke", NoSolutionError)
     rate = _stable(vibration_wheel_rate(spring, path, stroke))
     frequency: Quantity = np.sqrt(STANDARD_GRAVITY * rate / load) / TURN
     return frequency

@@ -11,7 +11,7 @@ from typing import Final
 import numpy as np
 
 from core.air_spring import Chambers
-from core.checks import Quantity, not_negative, positive
+from core.checks import Quantity, finite, not_negative, positive, require
 from core.geometry import Fork
 from core.linkage import Linkage
 from core.parts import Part
@@ -31,6 +31,7 @@ EXPONENT: Final = (1.2, 1.4)  # [-] n; conduction theory gives 1.32 to 1.39, mix
 JOINED_SHARE: Final = (0.0, 0.05)  # [-] sₚ per full stroke
 
 STEEPNESS: Final = Measured(1.07, 0.16)  # [-] 1 for a coil, 0.8 to 1.4 for air with these chambers
+STEEPNESSES: Final = (0.1, 10.0)  # [-] of any spring
 
 
 @dataclass(frozen=True)
@@ -43,17 +44,21 @@ class PowerSpring(Spring):
     that a real spring's chambers, preload and exponent do there.
 
     Attributes:
-        steepness: m, by how many per cent the force grows for one per cent of stroke [-].
+        steepness: m, by how many per cent the force grows for one per cent of stroke [-], 0.1 to
+            10.
 
     Raises:
-        InvalidInputError: code ``not_finite``, ``not_positive`` or ``beyond_any_bike``.
+        InvalidInputError: code ``not_finite`` or ``steepness``.
     """
 
     steepness: Quantity
 
     def __post_init__(self) -> None:
         """Refuse what is no spring."""
-        positive("steepness", self.steepness)
+        finite("steepness", self.steepness)
+        low, high = STEEPNESSES
+        within = np.less_equal(low, self.steepness) & np.less_equal(self.steepness, high)
+        require(within, "steepness", "steepness")
 
     @property
     def scale(self) -> float:

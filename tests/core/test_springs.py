@@ -316,7 +316,7 @@ def test_linkage_that_gives_way_is_told():
         (lambda: AirSpring(CHAMBERS, 0.0), "not_positive"),
         (lambda: AirSpring(CHAMBERS, 5 * BAR, 0.0), "not_positive"),
         (lambda: AirSpring(CHAMBERS, 5 * BAR, ambient=0.0), "not_positive"),
-        (lambda: PowerSpring(0.0), "not_positive"),
+        (lambda: PowerSpring(0.09), "steepness"),
         (lambda: PowerSpring(1.1).slope(0.0), "not_positive"),
         (lambda: coil_rate(77e9, 0.01, 0.02, 6), "coil_shape"),
         (lambda: stroke_under(COIL, REAR, 0.0), "not_positive"),
