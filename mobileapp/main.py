@@ -15,11 +15,11 @@ async def main(page: ft.Page) -> None:
     page.title = state.texts("app.name")
     page.theme = theme.theme(theme.SUN)
     page.dark_theme = theme.theme(theme.DARK)
-    page.theme_mode = ft.ThemeMode.LIGHT  # the sun first; the dark is a setting
     page.on_resize = lambda: state.turned(page)
     state.turned(page)
     await state.start()
-    page.render_views(App, state)
+    state.dress(page)
+    page.render_views(App, lambda: state)
     browser.mark_usable()
     asyncio.create_task(state.follow_page())  # noqa: RUF006 - lives as long as the page
 

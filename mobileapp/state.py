@@ -10,7 +10,7 @@ from typing import TYPE_CHECKING, Final
 
 import flet as ft
 
-from mobileapp import browser
+from mobileapp import browser, settings
 from mobileapp.records import (
     BounceRun,
     End,
@@ -23,17 +23,18 @@ from mobileapp.records import (
     to_json,
 )
 from mobileapp.release_reading import NO_FRAMES, NO_OVERSHOOT
+from mobileapp.settings import AUTO, Settings
 from mobileapp.store import Store, StoreError, open_store
 from mobileapp.texts import Texts
 from mobileapp.trail_plan import Bump, TrailPlan
-from mobileapp.units import SYSTEMS, Amount
+from mobileapp.units import SYSTEMS, Amount, Quantity
 
 if TYPE_CHECKING:  # they need numpy, which arrives after the first paint
     from mobileapp.results.balance import BalanceView
     from mobileapp.results.bounce import BounceView
     from mobileapp.results.rebound import ReboundView
     from mobileapp.results.sag import SagView
-    from mobileapp.results.trail import BumpView
+    from mobileapp.results.trail import BumpView, Numbers
 
 RECORD_PREFIX: Final = "setup/"
 
@@ -44,8 +45,7 @@ class AppState:
     """The running app.
 
     Attributes:
-        texts: the words of the person's language.
-        units: unit symbols by quantity.
+        settings: what the person chose for all setups.
         setups: newest first.
         offline: whether the app starts without a network.
         update_waits: whether a newer release can take over.
@@ -55,8 +55,7 @@ class AppState:
         landscape: whether the screen is wider than high.
     """
 
-    texts: Texts = field(default_factory=lambda: Texts(browser.language()))
-    units: dict[str, str] = field(default_factory=lambda: dict(SYSTEMS["mixed"]))
+    settings: Settings = Settings()  # noqa: RUF009 - frozen
     setups: tuple[Setup, ...] = ()
     offline: browser.Offline = field(default_factory=browser.Offline)
     update_waits: bool = False
@@ -64,6 +63,31 @@ class AppState:
     trouble: tuple[str, ...] = ()
     deleted: Setup | None = None
     landscape: bool = False
+
+    @property
+    def texts(self) -> Texts:
+        """The words of the person's language."""
+        language = self.settings.language
+        return Texts(browser.language() if language == AUTO else language)
+
+    @property
+    def units(self) -> dict[Quantity, str]:
+        """Unit symbols by quantity."""
+        return SYSTEMS[self.settings.units]
+
+    def in_units(self, amount: Amount, quantity: Quantity) -> Amount:
+        """Return an amount in the person's unit; what is kept stays as it was typed."""
+        unit = self.units[quantity]
+        return Amount(amount.value_in(unit), unit)
+
+    def dress(self, page: ft.Page) -> None:
+        """Give a page the chosen appearance."""
+        page.theme_mode = {
+            "sun": ft.ThemeMode.LIGHT,
+            "dark": ft.ThemeMode.DARK,
+            "auto": ft.ThemeMode.SYSTEM,
+        }[self.settings.appearance]
+        page.update()
 
     async def start(self) -> None:
         """Open the store and read what is in it."""
@@ -78,11 +102,13 @@ class AppState:
             return
         setups = []
         for key, text in texts.items():
-            if key.startswith(RECORD_PREFIX):
-                try:
+            try:
+                if key.startswith(RECORD_PREFIX):
                     setups.append(from_json(text))
-                except RecordError as error:
-                    self._report(error.code)
+                elif key == settings.KEY:
+                    self.settings = settings.from_json(text)
+            except RecordError as error:
+                self._report(error.code)
         self.setups = tuple(sorted(setups, key=lambda setup: setup.made, reverse=True))
 
     def turned(self, page: ft.Page) -> None:
@@ -146,7 +172,13 @@ class AppState:
             return None
         from mobileapp.results.trail import bump_view  # noqa: PLC0415 - numpy comes late
 
-        return bump_view(self.setup(key), self.trail(key), bump, self.texts, self.units)
+        return bump_view(self.setup(key), bump, self.texts, self.units)
+
+    def bump_numbers(self, key: str, end: End, bump: Bump) -> "Numbers":
+        """Return the numbers behind what `bump_view` says of an end."""
+        from mobileapp.results.trail import bump_numbers  # noqa: PLC0415 - numpy comes late
+
+        return bump_numbers(self.setup(key), end, bump, self.texts, self.units)
 
     def trail(self, key: str) -> TrailPlan:
         """Return the day's trail, or the first guess to step away from."""
@@ -155,6 +187,15 @@ class AppState:
     def save_trail(self, key: str, plan: TrailPlan) -> None:
         """Keep the day's trail with a setup."""
         self.save(replace(self.setup(key), trail=plan))
+
+    def save_speeds(self, key: str, **changes: Amount) -> None:
+        """Change the day's speeds, and keep them."""
+        self.save_trail(key, replace(self.trail(key), **changes))
+
+    def save_bump(self, key: str, index: int, **changes: Amount) -> None:
+        """Change a row of bumps, and keep it."""
+        plan = self.trail(key)
+        self.save_trail(key, plan.with_bump(index, replace(plan.bumps[index], **changes)))
 
     def save_reading(self, key: str, end: End, **changes: Amount) -> None:
         """Change values of a reading, and keep it."""
@@ -184,13 +225,18 @@ class AppState:
         setup = self._summarised(setup)
         others = tuple(other for other in self.setups if other.key != setup.key)
         self.setups = tuple(sorted((setup, *others), key=lambda kept: kept.made, reverse=True))
-        self._write(setup.key, to_json(setup))
+        self._write(RECORD_PREFIX + setup.key, to_json(setup))
+
+    def save_settings(self, chosen: Settings) -> None:
+        """Change the settings, and keep them."""
+        self.settings = chosen
+        self._write(settings.KEY, settings.to_json(chosen))
 
     def delete(self, key: str) -> None:
         """Take a setup away; `undelete` brings it back."""
         self.deleted = self.setup(key)
         self.setups = tuple(setup for setup in self.setups if setup.key != key)
-        self._write(key, None)
+        self._write(RECORD_PREFIX + key, None)
 
     def undelete(self) -> None:
         """Bring the setup deleted last back."""
@@ -206,7 +252,7 @@ class AppState:
         return replace(setup, shown=summary(setup, self.texts))
 
     def _write(self, key: str, text: str | None) -> None:
-        self._unsaved[RECORD_PREFIX + key] = text
+        self._unsaved[key] = text
         if self._writing is None or self._writing.done():
             self._writing = asyncio.create_task(self._write_all())
 

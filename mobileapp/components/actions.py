@@ -71,3 +71,17 @@ def word_action(
         height=theme.TOUCH,
         style=ft.ButtonStyle(text_style=theme.bold(theme.BODY), color=theme.ACCENT),
     )
+
+
+def opener(label: str, on_click: Handler, *, is_open: bool) -> ft.Control:
+    """A word that shows what is below it, or hides it again."""
+    return ft.Semantics(
+        expanded=is_open,
+        content=ft.TextButton(
+            content=label,
+            icon=ft.Icons.EXPAND_LESS if is_open else ft.Icons.EXPAND_MORE,
+            on_click=on_click,
+            height=theme.TOUCH,
+            style=ft.ButtonStyle(text_style=theme.bold(theme.BODY), color=theme.ACCENT),
+        ),
+    )

@@ -2,6 +2,7 @@
 
 import asyncio
 from collections.abc import Callable
+from dataclasses import dataclass
 from typing import Final
 
 import flet as ft
@@ -16,11 +17,34 @@ _REPEAT_S: Final = 0.08
 _FASTER_AFTER: Final = 12  # repeats; then each is five steps
 
 
+@dataclass(frozen=True)
+class Change:
+    """What a stepper does with a new value: it saves one field of something.
+
+    Unlike two lambdas, two changes of the same field are equal, so a stepper whose value stays
+    needn't render again.
+
+    Attributes:
+        save: keeps it, as ``save(*where, field=amount)``.
+        where: what the field belongs to.
+        field: its name.
+    """
+
+    save: Callable[..., None]
+    where: tuple[object, ...]
+    field: str
+
+    def __call__(self, amount: Amount) -> None:
+        """Save a new value."""
+        self.save(*self.where, **{self.field: amount})
+
+
+@ft.memo
 @ft.component
 def Stepper(
     name: str,
     amount: Amount,
-    on_change: Callable[[Amount], None],
+    on_change: Change,
     texts: Texts,
     error: str | None = None,
 ) -> ft.Control:

@@ -1,6 +1,7 @@
 """A bounce test in progress: the frequency so far, whether to go on, and its beats as a picture."""
 
 from dataclasses import dataclass
+from functools import lru_cache
 from itertools import pairwise
 from statistics import median
 from typing import Final, Literal
@@ -57,6 +58,7 @@ class BounceView:
     notes: tuple[str, ...] = ()
 
 
+@lru_cache(maxsize=64)  # a screen and the list at home ask for the same
 def bounce_view(run: BounceRun, texts: Texts, *, kept: bool = False) -> BounceView:
     """Return what to show for the taps so far.
 

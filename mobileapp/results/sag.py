@@ -1,6 +1,7 @@
 """Sag at one end: per cent, the band it lies in, and the frequency that follows."""
 
 from dataclasses import dataclass
+from functools import lru_cache
 from typing import Final, Literal
 
 import numpy as np
@@ -53,6 +54,7 @@ class SagView:
     notes: tuple[str, ...] = ()
 
 
+@lru_cache(maxsize=64)  # a screen and the list at home ask for the same
 def sag_view(end: End, entered: SagReading, texts: Texts) -> SagView:
     """Return what to show for a reading."""
     error = _error(entered, texts)

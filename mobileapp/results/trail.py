@@ -2,7 +2,6 @@
 
 from collections.abc import Mapping
 from dataclasses import dataclass
-from functools import lru_cache
 from itertools import chain
 from math import sin
 from typing import Final
@@ -11,7 +10,15 @@ import numpy as np
 
 from core.errors import SetupError
 from core.oscillator import transmissibility
-from core.trail import FORK_CROSSOVER, SHOCK_CROSSOVER, Bumps, Passage, following_limit, ride
+from core.trail import (
+    FORK_CROSSOVER,
+    SHOCK_CROSSOVER,
+    Bumps,
+    Passage,
+    following_limit,
+    regime_at,
+    ride,
+)
 from core.trail import End as EndTerms
 from core.uncertainty import Estimate, Measured
 from core.uneven import mean_damping
@@ -30,7 +37,7 @@ from mobileapp.units import UNITS
 SPACING_SD: Final = 0.1  # [-] of it: paced out; common practice, no source
 HEIGHT_SD: Final = 0.15  # [-] of it: judged by eye beside a tape; likewise
 REAR_LEVERAGE: Final = Measured(2.6, 0.3)  # [-] where the bike's isn't known; likewise
-CHART_POINTS: Final = 60
+CHART_POINTS: Final = 40
 CHART_REACH: Final = 1.4  # [-] of the fastest speed
 CHART_MARKS: Final = (0.0, 0.5, 1.0, 1.5, 2.0)  # [-]
 CHART_TOP: Final = 2.2  # [-] transmissibility; what lies above is off the paper
@@ -52,18 +59,16 @@ class Row:
 
 
 @dataclass(frozen=True)
-class EndView:
-    """What one end makes of a row of bumps.
+class Numbers:
+    """What one end makes of a row of bumps, with its ±.
 
     Attributes:
-        sentence: the whole in plain words.
-        rows: the numbers.
+        rows: the quantities.
         notes: further sentences, what was assumed among them.
     """
 
-    sentence: str
-    rows: tuple[Row, ...] = ()
-    notes: tuple[str, ...] = ()
+    rows: tuple[Row, ...]
+    notes: tuple[str, ...]
 
 
 @dataclass(frozen=True)
@@ -84,7 +89,7 @@ class BumpView:
     """What the trail screen shows of one row of bumps.
 
     Attributes:
-        ends: by end.
+        sentences: what each end makes of it, in plain words.
         curves: for the chart.
         fastest_shown: right end of the chart, in the person's unit.
         band: slowest and fastest speed of the day, likewise.
@@ -93,7 +98,7 @@ class BumpView:
         missing: why there is nothing else.
     """
 
-    ends: Mapping[End, EndView]
+    sentences: Mapping[End, str]
     curves: tuple[Curve, ...] = ()
     fastest_shown: float = 0.0
     band: tuple[float, float] = (0.0, 0.0)
@@ -111,16 +116,22 @@ class _Day:
     texts: Texts
     units: Mapping[str, str]
 
+    @classmethod
+    def of(cls, plan: TrailPlan, bump: Bump, texts: Texts, units: Mapping[str, str]) -> "_Day":
+        """Return the day with the ± of what was paced out and judged."""
+        spacing, height = bump.spacing.si, bump.height.si
+        row = Bumps(Measured(spacing, SPACING_SD * spacing), Measured(height, HEIGHT_SD * height))
+        return cls(row, plan, texts, units)
+
     def speed(self, value: float) -> str:
         """Return a speed [m/s] in words."""
         unit = UNITS[self.units["speed"]]
         return f"{number(value / unit.size, unit.decimals, comma=self.texts.comma)} {unit.symbol}"
 
 
-def bump_view(
-    setup: Setup, plan: TrailPlan, bump: Bump, texts: Texts, units: Mapping[str, str]
-) -> BumpView:
-    """Return what to show for a row of bumps."""
+def bump_view(setup: Setup, bump: Bump, texts: Texts, units: Mapping[str, str]) -> BumpView:
+    """Return what to show for a row of bumps at the day's speeds."""
+    plan = setup.trail or TrailPlan()
     if min(bump.spacing.si, bump.height.si, plan.slowest.si) <= 0:
         return BumpView({}, missing=texts("trail.missing.zero"))
     if plan.slowest.si >= plan.fastest.si:
@@ -128,26 +139,40 @@ def bump_view(
     known = {end: terms for end in ENDS if (terms := _terms(setup, end))}
     if not known:
         return BumpView({}, missing=texts("trail.missing.frequency"))
-    row = Bumps(
-        Measured(bump.spacing.si, SPACING_SD * bump.spacing.si),
-        Measured(bump.height.si, HEIGHT_SD * bump.height.si),
-    )
-    day = _Day(row, plan, texts, units)
-    try:
-        views = {
-            end: _end_view(end, terms, day, measured=end_damping(setup, end).measured)
-            for end, terms in known.items()
-        }
-    except SetupError as error:
-        return BumpView({}, missing=told(error, texts, units))
+    day = _Day.of(plan, bump, texts, units)
     speed = UNITS[units["speed"]].size
     reach = CHART_REACH * plan.fastest.si
     return BumpView(
-        views,
-        tuple(_curve(end, terms, row, reach, speed) for end, terms in known.items()),
+        {end: _sentence(end, terms, day) for end, terms in known.items()},
+        tuple(_curve(end, terms, day.row, reach, speed) for end, terms in known.items()),
         reach / speed,
         (plan.slowest.si / speed, plan.fastest.si / speed),
     )
+
+
+def bump_numbers(
+    setup: Setup, end: End, bump: Bump, texts: Texts, units: Mapping[str, str]
+) -> Numbers:
+    """Return the numbers of one end for a row of bumps at the day's speeds.
+
+    They take longer than the sentence, so they are worked out when someone asks for them.
+    """
+    plan = setup.trail or TrailPlan()
+    terms = _terms(setup, end)
+    if terms is None:
+        return Numbers((), (texts("trail.missing.frequency"),))
+    day = _Day.of(plan, bump, texts, units)
+    try:
+        slow, fast = (
+            ride(day.row, Measured(speed.si), terms) for speed in (plan.slowest, plan.fastest)
+        )
+    except SetupError as error:
+        return Numbers((), (told(error, texts, units),))
+    notes = [told(note, texts, units) for note in chain(slow.notes, fast.notes)]
+    if not end_damping(setup, end).measured:
+        notes.append(texts("trail.assumed.rebound"))
+    notes.append(texts("trail.assumed.compression"))
+    return Numbers(_rows(slow, fast, day), tuple(dict.fromkeys(notes)))
 
 
 def _terms(setup: Setup, end: End) -> EndTerms | None:
@@ -166,32 +191,26 @@ def _terms(setup: Setup, end: End) -> EndTerms | None:
     )
 
 
-@lru_cache(maxsize=64)
-def _ride(row: Bumps, speed: float, terms: EndTerms) -> Passage:
-    return ride(row, Measured(speed), terms)
-
-
-def _end_view(end: End, terms: EndTerms, day: _Day, *, measured: bool) -> EndView:
+def _sentence(end: End, terms: EndTerms, day: _Day) -> str:
     texts = day.texts
-    slow, fast = (_ride(day.row, speed.si, terms) for speed in (day.plan.slowest, day.plan.fastest))
     damping = float(mean_damping(terms.compression.value, terms.rebound.value))
     spacing, frequency = day.row.spacing.value, terms.frequency.value
+    slow, fast = (
+        float(forcing_frequency(speed.si, spacing)) / frequency
+        for speed in (day.plan.slowest, day.plan.fastest)
+    )
     sentence = texts(
-        f"trail.says.{slow.regime}_{fast.regime}",
+        f"trail.says.{regime_at(slow)}_{regime_at(fast)}",
         end=texts(f"sag.{end}"),
         resonant=day.speed(float(resonant_speed(spacing, frequency, damping))),
         filtering=day.speed(float(filtering_speed(spacing, frequency))),
-        percent=number(100 * fast.transmissibility.value, 0),
+        percent=number(100 * float(transmissibility(fast, damping)), 0),
         fast=day.speed(day.plan.fastest.si),
     )
     limit = following_limit(day.row, terms)
-    if limit is not None and limit <= day.plan.fastest.si:
-        sentence = f"{sentence} {texts('trail.lifts', speed=day.speed(limit))}"
-    notes = [told(note, texts, day.units) for note in chain(slow.notes, fast.notes)]
-    if not measured:
-        notes.append(texts("trail.assumed.rebound"))
-    notes.append(texts("trail.assumed.compression"))
-    return EndView(sentence, _rows(slow, fast, day), tuple(dict.fromkeys(notes)))
+    if limit is None or limit > day.plan.fastest.si:
+        return sentence
+    return f"{sentence} {texts('trail.lifts', speed=day.speed(limit))}"
 
 
 def _rows(slow: Passage, fast: Passage, day: _Day) -> tuple[Row, ...]:

@@ -35,7 +35,10 @@ def HomeScreen() -> ft.View:
             *[_saved(app, setup) for setup in app.setups],
             *([] if app.setups else [body(app.texts("home.none"))]),
         ],
-        actions=[icon_action(app.texts("home.about"), ft.Icons.INFO_OUTLINE, lambda: go("/about"))],
+        actions=[
+            icon_action(app.texts("settings.title"), ft.Icons.TUNE, lambda: go("/settings")),
+            icon_action(app.texts("home.about"), ft.Icons.INFO_OUTLINE, lambda: go("/about")),
+        ],
     )
 
 

@@ -9,7 +9,7 @@ from mobileapp.components.actions import main_action
 from mobileapp.components.choice import choice
 from mobileapp.components.frame import card, screen
 from mobileapp.components.scale import scale
-from mobileapp.components.stepper import Stepper
+from mobileapp.components.stepper import Change, Stepper
 from mobileapp.components.steps import steps
 from mobileapp.components.words import alarm, body, figure, title
 from mobileapp.pictures.swing import release
@@ -23,6 +23,7 @@ if TYPE_CHECKING:  # it needs numpy, which arrives after the first paint
     from mobileapp.results.rebound import ReboundView
 
 _NOT_COUNTED = Amount(0, "clicks")
+_LENGTHS = ("push", "overshoot")
 _READ = {"ruler": ("push", "overshoot"), "film": ("frames",), "not_passed": ("push",)}
 
 
@@ -45,30 +46,31 @@ def ReboundScreen() -> ft.View:
                 end,
                 set_end,
             ),
-            ReboundEnd(app, key, end, key=end),
+            _end(app, key, end),
             steps(key, "rebound", app.texts),
         ],
         back=(app.texts("back"), lambda: go("/")),
     )
 
 
-@ft.component
-def ReboundEnd(app: AppState, setup: str, end: End) -> ft.Control:
+def _end(app: AppState, setup: str, end: End) -> ft.Control:
     """The latest release test of one end, and its result."""
     kept = app.setup(setup)
     reading = kept.release(end)
     view = app.rebound_view(setup, end) if end in kept.releases else None
 
     def stepper(field: str) -> ft.Control:
+        amount = getattr(reading, field) or _NOT_COUNTED
         return Stepper(
             app.texts(f"rebound.{field}"),
-            getattr(reading, field) or _NOT_COUNTED,
-            lambda amount: app.save_release(setup, end, **{field: amount}),
+            app.in_units(amount, "length") if field in _LENGTHS else amount,
+            Change(app.save_release, (setup, end), field),
             app.texts,
             key=field,
         )
 
     return ft.Column(
+        key=end,
         spacing=theme.MARGIN,
         horizontal_alignment=ft.CrossAxisAlignment.STRETCH,
         controls=[

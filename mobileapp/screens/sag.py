@@ -9,7 +9,7 @@ from mobileapp.components.actions import main_action
 from mobileapp.components.choice import choice
 from mobileapp.components.frame import card, screen
 from mobileapp.components.gauge import gauge
-from mobileapp.components.stepper import Stepper
+from mobileapp.components.stepper import Change, Stepper
 from mobileapp.components.steps import steps
 from mobileapp.components.words import alarm, body, figure, title
 from mobileapp.pictures.o_ring import o_ring_on_fork, o_ring_on_shock
@@ -35,7 +35,7 @@ def SagScreen() -> ft.View:
         [
             *[alarm(app.texts(code)) for code in app.trouble],
             body(app.texts("sag.how")),
-            *[SagEnd(app, key, end, key=end) for end in ENDS],
+            *[_end(app, key, end) for end in ENDS],
             body(app.texts("sag.maker")),
             main_action(app.texts("sag.next"), ft.Icons.TOUCH_APP, lambda: go(f"/bounce/{key}")),
             steps(key, "sag", app.texts),
@@ -44,8 +44,7 @@ def SagScreen() -> ft.View:
     )
 
 
-@ft.component
-def SagEnd(app: AppState, setup: str, end: End) -> ft.Control:
+def _end(app: AppState, setup: str, end: End) -> ft.Control:
     """The reading of one end, and its result."""
     entered = app.reading(setup, end)
     view = app.sag_view(setup, end)
@@ -54,8 +53,8 @@ def SagEnd(app: AppState, setup: str, end: End) -> ft.Control:
     def stepper(name: str, field: str, error: str | None = None) -> ft.Control:
         return Stepper(
             name,
-            getattr(entered, field),
-            lambda amount: app.save_reading(setup, end, **{field: amount}),
+            app.in_units(getattr(entered, field), "length"),
+            Change(app.save_reading, (setup, end), field),
             app.texts,
             error,
             key=field,
@@ -70,6 +69,7 @@ def SagEnd(app: AppState, setup: str, end: End) -> ft.Control:
         *(_result(app, end, view) if view and view.percent else []),
         *([] if view or entered.place == "wheel" else [_picture(app, end)]),
         *([] if app.calculator else [body(app.texts("app.loading"))]),
+        key=end,
     )
 
 

@@ -1,26 +1,28 @@
 """Trail: the day's bumps and speeds, and what each end makes of them."""
 
-from dataclasses import replace
 from functools import partial
 from typing import TYPE_CHECKING
 
 import flet as ft
 
 from mobileapp import theme
-from mobileapp.components.actions import icon_action, main_action
+from mobileapp.components.actions import icon_action, main_action, opener
 from mobileapp.components.curves import curves
 from mobileapp.components.frame import card, screen
-from mobileapp.components.stepper import Stepper
+from mobileapp.components.stepper import Change, Stepper
 from mobileapp.components.steps import steps
 from mobileapp.components.table import table
 from mobileapp.components.words import alarm, body, title
 from mobileapp.format import typed
 from mobileapp.shared import use_app
 from mobileapp.state import AppState
-from mobileapp.units import Amount
+from mobileapp.trail_plan import Bump
 
-if TYPE_CHECKING:  # it needs numpy, which arrives after the first paint
-    from mobileapp.results.trail import BumpView, EndView
+if TYPE_CHECKING:  # results need numpy, which arrives after the first paint
+    from collections.abc import Callable
+
+    from mobileapp.results.trail import BumpView
+    from mobileapp.results.trail import Numbers as EndNumbers
 
 
 @ft.component
@@ -34,8 +36,8 @@ def TrailScreen() -> ft.View:
     def speed(field: str) -> ft.Control:
         return Stepper(
             app.texts(f"trail.{field}"),
-            getattr(plan, field),
-            lambda amount: app.save_trail(key, replace(app.trail(key), **{field: amount})),
+            app.in_units(getattr(plan, field), "speed"),
+            Change(app.save_speeds, (key,), field),
             app.texts,
             key=field,
         )
@@ -47,7 +49,7 @@ def TrailScreen() -> ft.View:
             *[alarm(app.texts(code)) for code in app.trouble],
             body(app.texts("trail.how")),
             card(speed("slowest"), speed("fastest")),
-            *[BumpCard(app, key, index, key=f"bump{index}") for index in range(len(plan.bumps))],
+            *[_bump(app, key, index) for index in range(len(plan.bumps))],
             main_action(
                 app.texts("trail.add"),
                 ft.Icons.ADD,
@@ -60,17 +62,12 @@ def TrailScreen() -> ft.View:
     )
 
 
-@ft.component
-def BumpCard(app: AppState, setup: str, index: int) -> ft.Control:
+def _bump(app: AppState, setup: str, index: int) -> ft.Control:
     """One row of bumps, and what each end makes of it."""
     plan = app.trail(setup)
     bump = plan.bumps[index]
     view = app.bump_view(setup, bump)
     count = str(index + 1)
-
-    def change(field: str, amount: Amount) -> None:
-        now = app.trail(setup)
-        app.save_trail(setup, now.with_bump(index, replace(now.bumps[index], **{field: amount})))
 
     heading = ft.Row(
         controls=[
@@ -94,47 +91,58 @@ def BumpCard(app: AppState, setup: str, index: int) -> ft.Control:
         *[
             Stepper(
                 app.texts(f"trail.{field}"),
-                getattr(bump, field),
-                partial(change, field),
+                app.in_units(getattr(bump, field), quantity),
+                Change(app.save_bump, (setup, index), field),
                 app.texts,
                 key=field,
             )
-            for field in ("spacing", "height")
+            for field, quantity in (("spacing", "distance"), ("height", "length"))
         ],
-        *_result(app, setup, view),
+        *_result(app, setup, bump, view),
+        key=f"bump{index}",
     )
 
 
-def _result(app: AppState, setup: str, view: "BumpView | None") -> list[ft.Control]:
+def _result(app: AppState, setup: str, bump: Bump, view: "BumpView | None") -> list[ft.Control]:
     if view is None:
         return [body(app.texts("app.loading"))]
     if view.missing:
         return [alarm(view.missing)]
     return [
         *[
-            ft.Text(end.sentence, size=theme.BODY, weight=ft.FontWeight.BOLD, color=theme.INK)
-            for end in view.ends.values()
+            ft.Text(sentence, size=theme.BODY, weight=ft.FontWeight.BOLD, color=theme.INK)
+            for sentence in view.sentences.values()
         ],
         curves(view, app.units["speed"], app.texts),
-        *[_numbers(app, setup, end, numbers) for end, numbers in view.ends.items()],
-    ]
-
-
-def _numbers(app: AppState, setup: str, end: str, view: "EndView") -> ft.Control:
-    plan = app.trail(setup)
-    speeds = [
-        app.texts("trail.at", speed=f"{typed(speed.value, speed.unit)} {speed.unit}")
-        for speed in (plan.slowest, plan.fastest)
-    ]
-    return ft.ExpansionTile(
-        key=end,
-        title=f"{app.texts(f'sag.{end}')}: {app.texts('trail.numbers')}",
-        tile_padding=0,
-        controls=[
-            table(
-                ("", *speeds),
-                [(row.name, row.slow, row.fast) for row in view.rows],
-            ),
-            *[body(note) for note in view.notes],
+        *[
+            Numbers(
+                f"{app.texts(f'sag.{end}')}: {app.texts('trail.numbers')}",
+                _speeds(app, setup),
+                partial(app.bump_numbers, setup, end, bump),
+                key=end,
+            )
+            for end in view.sentences
         ],
-    )
+    ]
+
+
+def _speeds(app: AppState, setup: str) -> list[str]:
+    plan = app.trail(setup)
+    return [
+        app.texts("trail.at", speed=f"{typed(speed.value, speed.unit)} {speed.unit}")
+        for speed in (app.in_units(speed, "speed") for speed in (plan.slowest, plan.fastest))
+    ]
+
+
+@ft.component
+def Numbers(name: str, speeds: list[str], load: "Callable[[], EndNumbers]") -> ft.Control:
+    """The numbers of one end, once someone asks for them."""
+    is_open, set_open = ft.use_state(False)  # noqa: FBT003 - Flet's own signature
+    controls = [opener(name, lambda: set_open(not is_open), is_open=is_open)]
+    if is_open:
+        numbers = load()
+        controls += [
+            table(("", *speeds), [(row.name, row.slow, row.fast) for row in numbers.rows]),
+            *[body(note) for note in numbers.notes],
+        ]
+    return ft.Column(controls, horizontal_alignment=ft.CrossAxisAlignment.STRETCH)

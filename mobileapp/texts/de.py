@@ -59,6 +59,20 @@ TEXTS: Final = {
     "home.deleted": "„{label}“ gelöscht",
     "home.about": "Über die App, Vorsicht",
     "setup.unnamed": "Setup vom {when}",
+    "settings.title": "Einstellungen",
+    "settings.units": "Einheiten",
+    "settings.units.mixed": "gemischt",
+    "settings.units.metric": "metrisch",
+    "settings.units.imperial": "Zoll",
+    "settings.about.mixed": "mm, kg, km/h, und psi der Pumpe und lbf/in der Feder.",
+    "settings.about.metric": "mm, kg, km/h, bar, N/mm.",
+    "settings.about.imperial": "in, lb, mph, psi, lbf/in.",
+    "settings.appearance": "Aussehen",
+    "settings.appearance.sun": "Sonne",
+    "settings.appearance.dark": "dunkel",
+    "settings.appearance.auto": "auto",
+    "settings.language": "Sprache",
+    "settings.language.auto": "auto",
     "sag.title": "Sag",
     "sag.front": "Vorn",
     "sag.rear": "Hinten",
@@ -162,7 +176,7 @@ TEXTS: Final = {
     "rebound.hand": (
         "Eine Stoppuhr in der Hand kann das nicht: Ihr ± wäre so breit wie die ganze Skala."
     ),
-    "rebound.clicks": "Klicks der Zugstufe von ganz zu",
+    "rebound.clicks": "Zugstufe, geöffnet von ganz zu",
     "rebound.picture": (
         "Das Rad über der Zeit: vom Druck hinauf durch die Sag-Marke, darüber und zurück."
     ),

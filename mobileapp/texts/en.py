@@ -46,6 +46,21 @@ TEXTS: Final = {
     "home.deleted": "Deleted “{label}”",
     "home.about": "About and cautions",
     "setup.unnamed": "Setup of {when}",
+    # Settings
+    "settings.title": "Settings",
+    "settings.units": "Units",
+    "settings.units.mixed": "mixed",
+    "settings.units.metric": "metric",
+    "settings.units.imperial": "inch",
+    "settings.about.mixed": "mm, kg, km/h, and the pump's psi and the coil's lbf/in.",
+    "settings.about.metric": "mm, kg, km/h, bar, N/mm.",
+    "settings.about.imperial": "in, lb, mph, psi, lbf/in.",
+    "settings.appearance": "Appearance",
+    "settings.appearance.sun": "sun",
+    "settings.appearance.dark": "dark",
+    "settings.appearance.auto": "auto",
+    "settings.language": "Language",
+    "settings.language.auto": "auto",
     # Sag
     "sag.title": "Sag",
     "sag.front": "Front",
@@ -135,7 +150,7 @@ TEXTS: Final = {
     "rebound.hand": (
         "A stopwatch in the hand can't do this: its ± would be as wide as the whole scale."
     ),
-    "rebound.clicks": "Rebound clicks from closed",
+    "rebound.clicks": "Rebound, opened from closed",
     "rebound.picture": (
         "The wheel over time: from the push up past the sag mark, over it, and back."
     ),

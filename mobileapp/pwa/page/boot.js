@@ -1,18 +1,18 @@
 // Starts the app: Python and the client side by side, then the keeping for offline use.
 
 import { startClient } from "./client.js";
-import { keepOffline } from "./offline.js";
+import { keepOffline, startAfresh } from "./offline.js";
+import { showProgress } from "./progress.js";
 import { onPython, onWorkerError } from "./python.js";
 import "./sound.js";
 import { appState, failed, usable } from "./status.js";
 import "./taps.js";
 
 const RELOAD = "Check the connection, then try again.";
-const SLOW_AFTER_MS = 90_000;
 
 function fail(what, next, details) {
-  failed(what, next, details);
-  keepOffline(); // a repaired release may be waiting
+  failed(what, next, details, startAfresh);
+  keepOffline(); // a repaired release may be waiting, and "try again" then takes it
 }
 
 onWorkerError(({ message }) => {
@@ -32,11 +32,7 @@ startClient().catch((error) =>
   fail("A part of the app did not load, or this browser lacks WebAssembly.", RELOAD, String(error)),
 );
 
-setTimeout(() => {
-  if (appState() === "starting") {
-    fail("The app has not started within a minute and a half.", RELOAD, "");
-  }
-}, SLOW_AFTER_MS);
+showProgress(() => fail("The app has not started: nothing arrives any more.", RELOAD, ""));
 
 // WebKit restores this page from its back/forward cache with a stopped picture. What was entered
 // is saved, so starting afresh loses nothing.

@@ -4,14 +4,16 @@
 // files the page needs come first; the worker then finds them in the browser's own cache.
 
 import { onPython, toPython } from "./python.js";
-import { appState, doing, offline } from "./status.js";
+import { offline } from "./status.js";
 
 const MB = 1e6;
 const UPDATE_EVERY_MS = 60 * 60 * 1000;
+const MOST_PATIENCE_MS = 10 * 60 * 1000;
 
 let started = false;
 let waiting; // the service worker of a newer release
 let last; // what Python was told last, for when it asks
+let patience = 5_000; // [ms] until the next attempt after a broken connection; doubles each time
 
 export function keepOffline() {
   if (started) return;
@@ -23,22 +25,36 @@ async function register() {
   if (!isSecureContext) return report("failed", { reason: "insecure" });
   if (!navigator.serviceWorker) return report("failed", { reason: "unsupported" });
   const { serviceWorker } = navigator;
-  const hadController = Boolean(serviceWorker.controller);
+  let controlled = Boolean(serviceWorker.controller);
   serviceWorker.addEventListener("message", ({ data }) => hear(data));
   serviceWorker.addEventListener("controllerchange", () => {
-    if (hadController) location.reload(); // another tab asked for the newer release
+    if (controlled) location.reload(); // another tab asked for the newer release
+    controlled = true; // else the first release has just taken this page into its care
   });
-  const registration = await serviceWorker.register("sw.js", { updateViaCache: "none" });
-  if (registration.waiting) announce(registration.waiting);
-  const follow = (worker) =>
-    worker?.addEventListener("statechange", () => {
+  addEventListener("online", tryAgain);
+  const registration = await keep();
+  setInterval(() => registration.update().catch(() => {}), UPDATE_EVERY_MS);
+}
+
+/** Have the service worker keep whatever isn't kept yet. */
+async function keep() {
+  const registration = await navigator.serviceWorker.register("sw.js", { updateViaCache: "none" });
+  const follow = (worker) => {
+    if (!worker) return;
+    worker.onstatechange = () => {
       if (worker.state === "installed" && registration.active) announce(worker);
       if (worker.state === "activated") report("ready");
-    });
-  registration.addEventListener("updatefound", () => follow(registration.installing));
+    };
+  };
+  registration.onupdatefound = () => follow(registration.installing);
   follow(registration.installing);
-  if (registration.active) registration.active.postMessage({ kind: "complete?" });
-  setInterval(() => registration.update().catch(() => {}), UPDATE_EVERY_MS);
+  if (registration.waiting) announce(registration.waiting);
+  registration.active?.postMessage({ kind: "complete?" });
+  return registration;
+}
+
+function tryAgain() {
+  if (last?.state === "failed") keep().catch(() => {});
 }
 
 /** A newer release is complete and waits. */
@@ -54,7 +70,19 @@ function hear({ kind, release, done, total, full }) {
     report("preparing", { done: done / MB, total: total / MB });
   }
   if (kind === "kept" && navigator.serviceWorker.controller) report("ready");
-  if (kind === "not kept") report("failed", { reason: full ? "full" : "network" });
+  if (kind === "not kept") {
+    report("failed", { reason: full ? "full" : "network" });
+    if (full) return;
+    setTimeout(tryAgain, patience);
+    patience = Math.min(2 * patience, MOST_PATIENCE_MS);
+  }
+}
+
+/** Load the page again, with the newer release if one waits. */
+export function startAfresh() {
+  if (!waiting) return location.reload();
+  waiting.addEventListener("statechange", () => location.reload());
+  waiting.postMessage({ kind: "take over" });
 }
 
 function report(state, more = {}) {
@@ -64,30 +92,5 @@ function report(state, more = {}) {
 }
 
 onPython("offline?", () => last && toPython(last));
-onPython("update", () => {
-  waiting?.addEventListener("statechange", () => location.reload());
-  waiting?.postMessage({ kind: "take over" });
-});
+onPython("update", startAfresh);
 onPython("persist", () => navigator.storage?.persist?.());
-
-// Before the first paint, on a first visit, show how much has arrived.
-if (!navigator.serviceWorker?.controller) showProgress();
-
-async function showProgress() {
-  const { files } = await (await fetch("release.json")).json();
-  const chromium = "v8BreakIterator" in Intl;
-  const total = files
-    .filter(({ path }) => !path.includes(chromium ? "canvaskit/canvaskit" : "canvaskit/chromium"))
-    .filter(({ path }) => !path.includes("late.pack") && !path.startsWith("screenshots/"))
-    .reduce((sum, { bytes }) => sum + bytes, 0);
-  let arrived = 0;
-  const show = (bytes) => {
-    arrived = Math.min(arrived + bytes, total);
-    if (appState() !== "starting") return;
-    doing(`Loading ${(arrived / MB).toFixed(0)} of ${(total / MB).toFixed(0)} MB`, arrived / total);
-  };
-  onPython("loaded", ({ bytes }) => show(bytes));
-  new PerformanceObserver((list) =>
-    show(list.getEntries().reduce((sum, entry) => sum + entry.decodedBodySize, 0)),
-  ).observe({ type: "resource", buffered: true });
-}

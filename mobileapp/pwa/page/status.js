@@ -19,13 +19,13 @@ export function usable() {
 }
 
 /** Nothing that a person could use is there, or will be. Show why, and what to do. */
-export function failed(what, next, details) {
+export function failed(what, next, details, again) {
   if (root.dataset.app === "failed") return;
   root.dataset.app = "failed";
   element("failure-what").textContent = what;
   element("failure-next").textContent = `${next} What you saved on this device is untouched.`;
   element("failure-details").textContent = `Release {{release}}\n${details ?? ""}`;
-  element("failure-again").addEventListener("click", () => location.reload());
+  element("failure-again").addEventListener("click", again);
   element("splash").hidden = true;
   element("failure").hidden = false;
 }

@@ -7,13 +7,18 @@
 
 const RELEASE = "{{release}}";
 const CACHE = `release-${RELEASE}`;
+const AT_ONCE = 4; // downloads side by side, for connections on which every answer takes its time
 const LIST = "kept-files"; // a cache entry: what the release consists of, for its successor
 
 // Which of two variants of the renderer the client will ask for; client.js decides likewise.
 const ENGINE = "v8BreakIterator" in Intl ? "chromium" : "other";
 const FILES = {{files}}.filter(({ engine }) => engine === null || engine === ENGINE);
 
-const address = (path) => new URL(path, self.registration.scope).href;
+const SCOPE = self.registration.scope;
+
+// The page is kept under the folder's own address: some hosts redirect index.html to it, and a
+// redirected response is no answer to a navigation.
+const address = (path) => new URL(path === "index.html" ? "./" : path, SCOPE).href;
 const byAddress = new Map(FILES.map((file) => [address(file.path), file]));
 const TOTAL = FILES.reduce((sum, file) => sum + file.bytes, 0);
 
@@ -32,18 +37,23 @@ self.addEventListener("message", (event) => {
 async function keepAll() {
   const cache = await caches.open(CACHE);
   const present = new Set((await cache.keys()).map((request) => request.url));
-  const earlier = await earlierFiles();
-  let done = 0;
-  try {
-    for (const file of FILES) {
+  const missing = FILES.filter(({ path }) => !present.has(address(path)));
+  const earlier = missing.length ? await earlierFiles() : new Map();
+  let done = TOTAL - missing.reduce((sum, file) => sum + file.bytes, 0);
+  const keepNext = async () => {
+    for (let file; (file = missing.shift()); ) {
       const url = address(file.path);
-      if (!present.has(url)) await cache.put(url, await obtain(file, url, earlier));
+      await cache.put(url, await obtain(file, url, earlier));
       done += file.bytes;
       await tell({ kind: "keeping", done, total: TOTAL });
     }
+  };
+  try {
+    await Promise.all(Array.from({ length: AT_ONCE }, keepNext));
     await cache.put(address(LIST), Response.json(FILES));
     await tell({ kind: "kept" });
   } catch (error) {
+    missing.length = 0;
     await tell({ kind: "not kept", full: error.name === "QuotaExceededError", done, total: TOTAL });
     throw error;
   }
@@ -86,9 +96,12 @@ async function dropOthers() {
 async function answer(request) {
   const url = new URL(request.url);
   if (url.origin !== location.origin) return Response.error();
-  const wanted = request.mode === "navigate" && isApp(url) ? address("index.html") : url.href;
+  const plain = url.href.split(/[?#]/)[0];
+  // An address below the folder that means nothing would break the page's relative ones.
+  const known = plain === SCOPE || byAddress.has(plain);
+  if (request.mode === "navigate" && !known) return Response.redirect(SCOPE);
   const cache = await caches.open(CACHE);
-  const kept = await cache.match(wanted, { ignoreSearch: true });
+  const kept = await cache.match(plain, { ignoreVary: true });
   if (kept) return kept;
   // Reached when the browser has thrown the cache away, and for the few files that aren't kept.
   try {
@@ -98,16 +111,16 @@ async function answer(request) {
   }
 }
 
-/** Whether an address is the app itself, not another document such as the licence notices. */
-function isApp(url) {
-  return url.href.split(/[?#]/)[0] === self.registration.scope || !byAddress.has(url.href);
-}
-
 function gone() {
-  const sentence =
-    "This browser has deleted the app's files. Open this page once with a connection to load " +
-    "them again. What you saved is kept apart from them.";
-  return new Response(`<!doctype html><meta name="viewport" content="width=device-width"><p>${sentence}`, {
+  const page = `<!doctype html>
+<html lang="en" data-app="failed" data-offline="failed">
+<meta charset="utf-8">
+<meta name="viewport" content="width=device-width, initial-scale=1">
+<title>Sag &amp; Bounce</title>
+<p>This browser has deleted the app's files. Open this page once with a connection to load them
+again. What you saved is kept apart from them.</p>
+<p><a href="${SCOPE}">Try again</a></p>`;
+  return new Response(page, {
     status: 503,
     headers: { "Content-Type": "text/html; charset=utf-8" },
   });
