@@ -1,12 +1,14 @@
 """What the trail screen shows, against the handbook's relations for base excitation."""
 
+from dataclasses import replace
 from math import pi, sqrt
 
 import pytest
 
 from mobileapp.records import SagReading, from_json, new_setup, to_json
+from mobileapp.release_reading import ReleaseReading
 from mobileapp.results.frequency import end_frequency
-from mobileapp.results.trail import CHART_POINTS, bump_view
+from mobileapp.results.trail import CHART_POINTS, bump_numbers, bump_view
 from mobileapp.texts import LANGUAGES, Texts
 from mobileapp.trail_plan import FIRST_BUMP, MOST_BUMPS, Bump, TrailPlan
 from mobileapp.units import SYSTEMS, Amount
@@ -24,24 +26,32 @@ def measured(*ends):
     return setup
 
 
-def row(view, end, name):
-    return next(row for row in view.ends[end].rows if row.name.startswith(name))
+def ridden(setup, bump=FIRST_BUMP, plan=PLAN):
+    return bump_view(replace(setup, trail=plan), bump, ENGLISH, UNITS)
+
+
+def numbers(setup, end="front", bump=FIRST_BUMP, plan=PLAN):
+    return bump_numbers(replace(setup, trail=plan), end, bump, ENGLISH, UNITS)
+
+
+def row(found, name):
+    return next(row for row in found.rows if row.name.startswith(name))
 
 
 def test_the_numbers_are_those_of_a_sine():
-    view = bump_view(measured("front"), PLAN, FIRST_BUMP, ENGLISH, UNITS)
-    forcing = row(view, "front", "Bumps a second")
+    found = numbers(measured("front"))
+    forcing = row(found, "Bumps a second")
     assert float(forcing.slow.split()[0]) == pytest.approx(10 / 3.6 / 1.5, abs=0.06)
     assert float(forcing.fast.split()[0]) == pytest.approx(25 / 3.6 / 1.5, abs=0.06)
     # Peak speed of a sine: 2π f A, with half the bumps' height as A.
-    speed = row(view, "front", "Wheel speed")
+    speed = row(found, "Wheel speed")
     assert float(speed.fast.split()[0]) == pytest.approx(2 * pi * 25 / 3.6 / 1.5 * 0.03, abs=0.06)
 
 
 def test_transmissibility_is_that_of_base_excitation():
     # Thomson, Theory of Vibration: √[(1 + (2ζr)²) / ((1 − r²)² + (2ζr)²)].
     setup = measured("front")
-    view = bump_view(setup, PLAN, FIRST_BUMP, ENGLISH, UNITS)
+    view = ridden(setup)
     frequency = end_frequency(setup, "front").measured.value
     zeta = (0.45 + 0.4 * 0.45) / 2
     (curve,) = view.curves
@@ -53,23 +63,26 @@ def test_transmissibility_is_that_of_base_excitation():
 
 
 def test_both_ends_speak_when_both_are_known():
-    view = bump_view(measured("front", "rear"), PLAN, FIRST_BUMP, ENGLISH, UNITS)
-    assert view.ends["front"].sentence.startswith("Front: ")
-    assert view.ends["rear"].sentence.startswith("Rear: ")
+    view = ridden(measured("front", "rear"))
+    assert view.sentences["front"].startswith("Front: ")
+    assert view.sentences["rear"].startswith("Rear: ")
     assert view.band == (pytest.approx(10), pytest.approx(25))
 
 
 def test_long_waves_are_followed_and_short_ones_smoothed():
     for spacing, words in ((20, "goes up and down"), (0.4, "at all these speeds")):
         bump = Bump(Amount(spacing, "m"), Amount(30, "mm"))
-        view = bump_view(measured("front"), PLAN, bump, ENGLISH, UNITS)
-        assert words in view.ends["front"].sentence
+        view = ridden(measured("front"), bump)
+        assert words in view.sentences["front"]
 
 
 def test_what_is_assumed_is_named():
-    view = bump_view(measured("front"), PLAN, FIRST_BUMP, ENGLISH, UNITS)
-    assert ENGLISH("trail.assumed.rebound") in view.ends["front"].notes
-    assert ENGLISH("trail.assumed.compression") in view.ends["front"].notes
+    notes = numbers(measured("front")).notes
+    assert ENGLISH("trail.assumed.rebound") in notes
+    assert ENGLISH("trail.assumed.compression") in notes
+    rebound = ReleaseReading(overshoot=Amount(10, "mm"))
+    notes = numbers(measured("front").with_release("front", rebound, new=True)).notes
+    assert ENGLISH("trail.assumed.rebound") not in notes
 
 
 @pytest.mark.parametrize(
@@ -82,7 +95,7 @@ def test_what_is_assumed_is_named():
     ],
 )
 def test_what_is_missing_is_asked_for(setup, plan, bump, missing):
-    view = bump_view(setup, plan, bump, ENGLISH, UNITS)
+    view = ridden(setup, bump, plan)
     assert view.missing == ENGLISH(f"trail.missing.{missing}")
 
 
@@ -104,7 +117,7 @@ def test_every_pair_of_regimes_has_a_sentence(language):
 
 def test_a_plan_survives_being_kept():
     plan = PLAN.with_another().with_bump(1, Bump(Amount(3, "ft"), Amount(2, "in")))
-    setup = new_setup("k").__class__("k", new_setup("k").made, trail=plan)
+    setup = replace(new_setup("k"), trail=plan)
     assert from_json(to_json(setup)) == setup
 
 
