@@ -24,7 +24,7 @@ from importlib import import_module
 from typing import TYPE_CHECKING, Final
 
 if TYPE_CHECKING:
-    from core.air_pressure import hose_drop, pressure_after
+    from core.air_pressure import hose_drop, judge_drop, pressure_after
     from core.air_spring import AirSpring, Chambers
     from core.atmosphere import pressure_at
     from core.balance import Balance, Comparison, EndState, compare_ends
@@ -51,6 +51,7 @@ if TYPE_CHECKING:
         undamped_frequency,
     )
     from core.packing import interval_for, packed_share, recovered_share
+    from core.parts import Part, propagate_parts
     from core.pressure_change import PressureChange, change_pressure, pressure_for_stroke
     from core.rebound import (
         crossing_time,
@@ -68,8 +69,23 @@ if TYPE_CHECKING:
         damping_if_not_passed,
         time_from_frames,
     )
-    from core.sag import frequency_from_sag, mean_sag, sag_notes, sag_share
-    from core.springs import Spring, frequency_with_mass, loaded_frequency, stroke_under, wheel_load
+    from core.sag import (
+        frequency_from_sag,
+        mean_sag,
+        sag_depth,
+        sag_notes,
+        sag_share,
+        share_of_travel,
+    )
+    from core.springs import (
+        Spring,
+        frequency_with_mass,
+        loaded_frequency,
+        static_wheel_rate,
+        stroke_under,
+        vibration_wheel_rate,
+        wheel_load,
+    )
     from core.trail import Bumps, End, Passage, following_limit, ride
     from core.two_sided import TwoSided, one_sided_sd, two_sided_sag
     from core.tyre import (
@@ -80,6 +96,7 @@ if TYPE_CHECKING:
     )
     from core.uncertainty import Estimate, Measured, decimals_for, mean_reading, propagate
     from core.uneven import least_contact, mean_damping, mean_drop
+    from core.unknown import common_air_spring, common_chambers, common_fork, common_linkage
     from core.waves import (
         filtering_speed,
         forcing_frequency,
@@ -108,6 +125,7 @@ __all__ = [
     "Measured",
     "NoSolutionError",
     "Note",
+    "Part",
     "Passage",
     "PressureChange",
     "ReboundAdvice",
@@ -121,6 +139,10 @@ __all__ = [
     "change_pressure",
     "clicks_for_damping",
     "coil_rate",
+    "common_air_spring",
+    "common_chambers",
+    "common_fork",
+    "common_linkage",
     "compare_ends",
     "crossing_time",
     "damped_frequency",
@@ -144,6 +166,7 @@ __all__ = [
     "frequency_with_mass",
     "hose_drop",
     "interval_for",
+    "judge_drop",
     "least_contact",
     "loaded_frequency",
     "mean_damping",
@@ -161,15 +184,19 @@ __all__ = [
     "pressure_at",
     "pressure_for_stroke",
     "propagate",
+    "propagate_parts",
     "rate_for_stroke",
     "recovered_share",
     "resonant_speed",
     "ride",
+    "sag_depth",
     "sag_notes",
     "sag_share",
     "series_stiffness",
     "settling_time",
+    "share_of_travel",
     "sine_peaks",
+    "static_wheel_rate",
     "stiffness_from_frequency",
     "stroke_disagreement",
     "stroke_ratio",
@@ -180,13 +207,14 @@ __all__ = [
     "tyre_frequency_factor",
     "undamped_frequency",
     "unmarked_coil",
+    "vibration_wheel_rate",
     "wheel_hop_frequency",
     "wheel_load",
     "wheel_return_time",
 ]
 
 _NAMES: Final = {
-    "core.air_pressure": "hose_drop pressure_after",
+    "core.air_pressure": "hose_drop judge_drop pressure_after",
     "core.air_spring": "AirSpring Chambers",
     "core.atmosphere": "pressure_at",
     "core.balance": "Balance Comparison EndState compare_ends",
@@ -213,6 +241,7 @@ _NAMES: Final = {
         "undamped_frequency "
     ),
     "core.packing": "interval_for packed_share recovered_share",
+    "core.parts": "Part propagate_parts",
     "core.pressure_change": "PressureChange change_pressure pressure_for_stroke",
     "core.rebound": (
         "crossing_time damping_from_crossing damping_from_release settling_time wheel_return_time "
@@ -226,13 +255,22 @@ _NAMES: Final = {
         "damping_if_not_passed "
         "time_from_frames "
     ),
-    "core.sag": "frequency_from_sag mean_sag sag_notes sag_share",
-    "core.springs": "Spring frequency_with_mass loaded_frequency stroke_under wheel_load",
+    "core.sag": "frequency_from_sag mean_sag sag_depth sag_notes sag_share share_of_travel",
+    "core.springs": (
+        "Spring "
+        "frequency_with_mass "
+        "loaded_frequency "
+        "static_wheel_rate "
+        "stroke_under "
+        "vibration_wheel_rate "
+        "wheel_load "
+    ),
     "core.trail": "Bumps End Passage following_limit ride",
     "core.two_sided": "TwoSided one_sided_sd two_sided_sag",
     "core.tyre": ("membrane_stiffness series_stiffness tyre_frequency_factor wheel_hop_frequency "),
     "core.uncertainty": "Estimate Measured decimals_for mean_reading propagate",
     "core.uneven": "least_contact mean_damping mean_drop",
+    "core.unknown": "common_air_spring common_chambers common_fork common_linkage",
     "core.waves": (
         "filtering_speed forcing_frequency peak_response_ratio resonant_speed sine_peaks "
     ),

@@ -10,18 +10,19 @@ from typing import Final
 
 import numpy as np
 
-from core.air_spring import Chambers
+from core.air_spring import AirSpring, Chambers
 from core.checks import Quantity, finite, not_negative, positive, require
+from core.constants import STANDARD_PRESSURE
 from core.geometry import Fork
 from core.linkage import Linkage
-from core.parts import Part
+from core.parts import Part, as_measured
 from core.springs import Spring
 from core.uncertainty import Measured
 
 HEAD_ANGLE: Final = Measured(65.0 * pi / 180.0, 1.5 * pi / 180.0)  # [rad]
 PROGRESSION: Final = Measured(0.15, 0.07)  # [-] of a rear linkage
 MEAN_LEVERAGE: Final = Measured(2.6, 0.2)  # [-] of a rear linkage
-AIR_PRESSURE: Final = Measured(8e5, 2e5)  # [Pa] gauge; it hardly matters where it isn't asked for
+AIR_PRESSURE: Final = Measured(8e5, 2e5)  # [Pa] gauge; of a frequency it decides less than 1 %
 
 # Limits between which anything is taken as equally likely, lengths by ratio.
 LENGTH_SHARE: Final = (1.3, 2.0)  # [-] L per full stroke
@@ -137,6 +138,27 @@ def common_chambers(stroke: float) -> Part[Chambers]:
         )
 
     return Part(build, (Measured(0.0, 1.0),) * 5)
+
+
+def common_air_spring(
+    stroke: float, pressure: Measured | float = AIR_PRESSURE, ambient: float = STANDARD_PRESSURE
+) -> Part[AirSpring]:
+    """Return an air spring of which only the full stroke is known, and perhaps the pressure.
+
+    Args:
+        stroke: the full shaft stroke [m], positive.
+        pressure: on the gauge [Pa].
+        ambient: pressure outside [Pa].
+
+    Raises:
+        InvalidInputError: code ``not_finite`` or ``not_positive``.
+    """
+    chambers = common_chambers(stroke)
+
+    def build(pressure: Quantity, *unit_normals: Quantity) -> AirSpring:
+        return AirSpring(chambers.build(*unit_normals), pressure, ambient=ambient)
+
+    return Part(build, (as_measured(pressure), *chambers.readings))
 
 
 def common_fork(travel: Measured | float, head_angle: Measured | float = HEAD_ANGLE) -> Part[Fork]:

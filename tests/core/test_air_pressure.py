@@ -96,6 +96,17 @@ def test_what_no_gauge_shows_is_refused(call, code):
     assert caught.value.code == code
 
 
+def test_edges_of_the_weather_are_allowed():
+    assert pressure_after(12 * BAR, 420.0, 210.0) < 6 * BAR < pressure_after(12 * BAR, 210.0, 420.0)
+
+
+def test_ratio_of_areas_is_checked():
+    for ratio in (0.49, 1.01):
+        with pytest.raises(InvalidInputError) as caught:
+            chamber_length(5e5, 6e5, 0.035, 0.03, negative_length=0.06, area_ratio=ratio)
+        assert caught.value.code == "area_ratio"
+
+
 def test_nothing_left_on_the_gauge_is_told():
     with pytest.raises(NoSolutionError) as caught:
         pressure_after(np.array([5e5, 1e3]), 300, 280)

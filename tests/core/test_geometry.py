@@ -117,6 +117,13 @@ def test_stroke_that_does_not_fit_is_told():
     assert stroke_disagreement(naive, 55 * MM).code == "stroke_disagrees"
 
 
+def test_edges_of_what_a_bike_has_are_allowed():
+    assert Fork(0.15, 55 * DEGREE).head_angle < Fork(0.15, 80 * DEGREE).head_angle
+    assert Linkage(0.15, 0.5, 6.0).leverage_slope > 0 > Linkage(0.15, 6.0, 0.5).leverage_slope
+    for progression in (-0.5, 0.6):
+        assert Linkage.from_stroke(0.15, 0.06, progression).full_stroke == pytest.approx(0.06)
+
+
 @pytest.mark.parametrize(
     ("make", "field", "code"),
     [
@@ -125,7 +132,7 @@ def test_stroke_that_does_not_fit_is_told():
         (lambda: Fork(0.15, np.nan), "head_angle", "not_finite"),
         (lambda: Fork(0.0, 65 * DEGREE), "full_stroke", "not_positive"),
         (lambda: Linkage(-0.15, 3, 2), "travel", "not_positive"),
-        (lambda: Linkage(0.15, 0.0, 2), "start", "leverage"),
+        (lambda: Linkage(0.15, 0.49, 2), "start", "leverage"),
         (lambda: Linkage(0.15, 3, 6.1), "end", "leverage"),
         (lambda: Linkage(0.15, 3, np.inf), "end", "not_finite"),
         (lambda: Linkage.from_stroke(0.15, 0.055, 1.0), "progression", "progression"),

@@ -9,17 +9,23 @@ from core.errors import InvalidInputError
 from core.geometry import Fork
 from core.linkage import Linkage
 from core.parts import Part, as_measured, nominal, propagate_parts
+from core.sag import frequency_from_sag
 from core.springs import loaded_frequency
 from core.uncertainty import Estimate, Measured, propagate
 from core.units import BAR, DEGREE, MM
 from core.unknown import (
+    AIR_PRESSURE,
     AREA_RATIO,
     EXPONENT,
+    HEAD_ANGLE,
     JOINED_SHARE,
     LENGTH_SHARE,
+    MEAN_LEVERAGE,
     NEGATIVE_SHARE,
     PROGRESSION,
+    STEEPNESS,
     UNKNOWN_SPRING,
+    common_air_spring,
     common_chambers,
     common_fork,
     common_linkage,
@@ -109,6 +115,35 @@ def test_unknown_spring_covers_common_air_springs(share, pressure, least):
     assert held.mean() > least
     coil = unknown.value / np.sqrt(UNKNOWN_SPRING.readings[0].value)
     assert unknown.low < coil < unknown.high
+
+
+def test_common_air_springs():
+    known = common_air_spring(STROKE, 5 * BAR, 0.8 * BAR)
+    assert known.nominal == AirSpring(common_chambers(STROKE).nominal, 5 * BAR, ambient=0.8 * BAR)
+    assert known.readings[1:] == common_chambers(STROKE).readings
+    # Without the pressure the frequency is as good as with it.
+    unsure, sure = (
+        frequency_from_sag(common_fork(STROKE), Measured(30 * MM), spring=spring)
+        for spring in (common_air_spring(STROKE), common_air_spring(STROKE, 8 * BAR))
+    )
+    assert_allclose(unsure.value, sure.value)
+    assert_allclose(unsure.half_width, sure.half_width, rtol=0.03)
+    # Nothing but air is hardly more than nothing: its chambers decide.
+    anything = frequency_from_sag(common_fork(STROKE), Measured(30 * MM))
+    assert_allclose([unsure.low, unsure.high], [anything.low, anything.high], rtol=0.04)
+
+
+def test_defaults_are_as_documented():
+    # Common practice, no source.
+    assert_allclose([HEAD_ANGLE.value / DEGREE, HEAD_ANGLE.sd / DEGREE], [65.0, 1.5])
+    assert Measured(0.15, 0.07) == PROGRESSION
+    assert Measured(2.6, 0.2) == MEAN_LEVERAGE
+    assert Measured(8 * BAR, 2 * BAR) == AIR_PRESSURE
+    assert Measured(1.07, 0.16) == STEEPNESS
+    assert common_linkage(0.15).readings[1] == MEAN_LEVERAGE
+    assert common_fork(0.15).readings[1] == HEAD_ANGLE
+    assert common_air_spring(0.15).readings[0] == AIR_PRESSURE
+    assert UNKNOWN_SPRING.readings == (STEEPNESS,)
 
 
 def test_common_linkages():

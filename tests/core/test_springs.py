@@ -9,7 +9,15 @@ from scipy.integrate import quad, solve_ivp
 from scipy.optimize import brentq
 
 from core.air_spring import NEAR_END, AirSpring, Chambers
-from core.coil import Coil, coil_rate, unmarked_coil
+from core.coil import (
+    CHROME_SILICON,
+    COILS_SD,
+    DIAMETER_SD,
+    WIRE_SD,
+    Coil,
+    coil_rate,
+    unmarked_coil,
+)
 from core.constants import STANDARD_GRAVITY
 from core.errors import InvalidInputError, NoSolutionError
 from core.geometry import Fork
@@ -24,6 +32,7 @@ from core.springs import (
     vibration_wheel_rate,
     wheel_load,
 )
+from core.uncertainty import Measured
 from core.units import BAR, DEGREE, LBF_PER_INCH, MM
 from core.unknown import PowerSpring
 from tests.core.strategies import air_springs_for, ends, linkages, shares
@@ -317,6 +326,7 @@ def test_linkage_that_gives_way_is_told():
         (lambda: AirSpring(CHAMBERS, 5 * BAR, 0.0), "not_positive"),
         (lambda: AirSpring(CHAMBERS, 5 * BAR, ambient=0.0), "not_positive"),
         (lambda: PowerSpring(0.09), "steepness"),
+        (lambda: PowerSpring(10.1), "steepness"),
         (lambda: PowerSpring(1.1).slope(0.0), "not_positive"),
         (lambda: coil_rate(77e9, 0.01, 0.02, 6), "coil_shape"),
         (lambda: stroke_under(COIL, REAR, 0.0), "not_positive"),
@@ -333,7 +343,7 @@ def test_springs_end():
     assert Coil(5e4).end == np.inf
     assert Coil(5e4, free_stroke=0.05).end == 0.05
     assert_allclose([CHAMBERS.end, AIR.end], NEAR_END * 240 * MM)
-    assert PowerSpring(1.0).end == np.inf
+    assert PowerSpring(0.1).end == PowerSpring(10.0).end == np.inf
     # A coil that touches before the shock bottoms is the end of it.
     short = Coil(5e4, free_stroke=0.04)
     with pytest.raises(NoSolutionError) as caught:
@@ -349,6 +359,12 @@ def test_unmarked_coil_is_known_to_about_twelve_per_cent():
     expected = 1.96 * np.sqrt(np.square(parts).sum())
     assert_allclose(rate.half_width / rate.value, expected, rtol=0.03)
     assert 0.11 < expected < 0.13
+
+
+def test_what_calipers_leave_open():
+    # Common practice, no source; the modulus from memory.
+    assert Measured(77e9, 1.54e9) == CHROME_SILICON
+    assert (WIRE_SD, DIAMETER_SD, COILS_SD) == (0.05 * MM, 0.5 * MM, 0.25)
 
 
 @given(
