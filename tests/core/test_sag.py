@@ -182,6 +182,11 @@ def test_one_reading_of_two_sided_sag(low, band):
     assert_allclose(one_sided_sd(low, low + band), spread, rtol=1e-4)
 
 
+def test_no_sag_at_all_is_a_limit_too():
+    assert_allclose(one_sided_sd(0.0, 0.0), 0.0)
+    assert_allclose(one_sided_sd(0.0, 12 * MM), np.sqrt(12) * MM)
+
+
 def test_intervals_are_repeatable():
     reading = Measured(30 * MM, MILLIMETRE)
     first, second = (frequency_from_sag(common_fork(150 * MM), reading) for _ in range(2))
