@@ -91,7 +91,7 @@ def rate_for_stroke(
     Source: equal load F(s)/φ(s) at both strokes.
     """
     force = _force_for_stroke(coil, path, stroke, wanted)
-    return force / (positive("wanted", wanted) + not_negative("preload", preload))
+    return force / (wanted + not_negative("preload", preload))
 
 
 def preload_for_stroke(

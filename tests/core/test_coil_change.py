@@ -174,6 +174,8 @@ def test_advice_is_within_the_usual_preload_and_nearer_the_target(reading, wante
         (lambda: change(45, 16.5, coil=Coil(7e4, 1 * MM, 40 * MM)), "coil_binds"),
         (lambda: rate_for_stroke(COIL, REAR, 0.02, 0.016, -0.001), "negative"),
         (lambda: preload_for_stroke(COIL, REAR, 0.02, 0.016, 0.0), "not_positive"),
+        (lambda: preload_for_stroke(COIL, REAR, 0.02, 0.0, 7e4), "not_positive"),
+        (lambda: preload_for_stroke(COIL, REAR, 0.0, 0.016, 7e4), "not_positive"),
     ],
 )
 def test_what_cannot_be_is_refused(call, code):
