@@ -181,6 +181,21 @@ def test_one_psi_decides_the_chamber_length():
     assert lengths[2] < 0.8 * lengths[1]
 
 
+def test_no_chamber_explains_these_readings():
+    # The quadratic in L has no root at all.
+    with pytest.raises(NoSolutionError) as caught:
+        chamber_length(
+            7.5 * BAR,
+            12.5 * BAR,
+            32 * MM,
+            48 * MM,
+            negative_length=12.7 * MM,
+            area_ratio=0.65,
+            leverage_ratio=0.82,
+        )
+    assert caught.value.code == "no_chamber"
+
+
 def test_believable_chambers():
     assumed = Chambers(1.6 * 150 * MM, 60 * MM, joined_at=2 * MM)
     true = Chambers(210 * MM, 60 * MM)
