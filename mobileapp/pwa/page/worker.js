@@ -65,6 +65,7 @@ async function start() {
   });
   early.splice(0).forEach((packet) => flet.send(packet));
   tell({ kind: "ready" });
+  pyodide.runPythonAsync("from mobileapp.warm_up import warm_up; await warm_up()").catch(explain);
 }
 
 async function load(name) {
