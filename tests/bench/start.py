@@ -1,110 +1,161 @@
-"""How long the app takes to start: ``python -m tests.bench.start [RUNS]``.
+"""How long the app takes to start: ``python -m tests.bench.start [RUNS] [--levers]``.
 
-From navigation to `data-app="usable"`, beside a bare page of Flet and numpy that the same build
-makes from a main function of five lines: for a first visit, warm with the server, and with the
-server gone. Medians of RUNS, and the bytes to keep, in Chromium on this machine.
+Times go from navigation to the frame that shows the first usable screen, by the page's own clock,
+beside a bare published page of Flet and numpy (bare_page.py), on this machine, in turn, so that a
+busy machine is busy for both. The bare page can't work offline; its best case, everything in the
+browser's cache and the server beside it, is set against ours from the kept files with the server
+gone. Both also with the whole browser slowed to a quarter, and ours with 1,000 setups saved.
+
+With --levers, ours again with one thing undone that makes it fast, each in turn (levers.py).
 """
 
+import argparse
+import json
 import shutil
-import subprocess
-import sys
 import tempfile
-import time
 from pathlib import Path
-from statistics import median
+from statistics import median, quantiles
 
 from playwright.sync_api import sync_playwright
 
-from tests.browser.chromium import launch
-from tests.browser.phone import OFFLINE_MS, PHONE, START_MS, STARTED
+from mobileapp.pwa.command import build_if_needed
+from mobileapp.pwa.paths import DEFAULT_SITE
+from tests.bench.bare_page import BareServer, make_bare_page
+from tests.bench.levers import LEVERS, undo
+from tests.bench.many import save_many
+from tests.browser.process import BrowserProcess
+from tests.browser.releases import list_anew
 from tests.browser.site import Server
 
-CHECKOUT = Path(__file__).parent.parent.parent
-BARE = '''"""A bare page: Flet, numpy, and one number."""
-
-import flet as ft
-
-from mobileapp import browser
-
-
-async def main(page: ft.Page) -> None:
-    await browser.late_ready()
-    import numpy as np
-
-    page.add(ft.Text(f"{np.sqrt(2.0):.3f}"))
-    browser.mark_usable()
-'''
+GOAL = 0.35
+SLOWER = 4
+MANY = 1000
+WARM_UPS = 2  # the first start from a cache compiles, the second finds it compiled
+STOPWATCH = (Path(__file__).parent / "stopwatch.js").read_text("utf-8")
 
 
-def build(folder, name, main=None):
-    """Build a copy of the checkout, with another main function if one is given."""
-    copy = folder / name
-    listing = subprocess.run(
-        ["git", "ls-files"], cwd=CHECKOUT, check=True, capture_output=True, text=True
-    )
-    for path in listing.stdout.splitlines():
-        (copy / path).parent.mkdir(parents=True, exist_ok=True)
-        shutil.copy(CHECKOUT / path, copy / path)
-    if main:
-        (copy / "mobileapp" / "main.py").write_text(main, "utf-8")
-    out = folder / f"{name}-site"
-    command = [sys.executable, "-m", "mobileapp", "build", "--out", str(out)]
-    subprocess.run(command, cwd=copy, check=True, stdout=subprocess.DEVNULL)
-    return out
+class Visitor:
+    """A browser of its own that visits one address again and again."""
+
+    def __init__(self, profile, address):
+        profile.mkdir()
+        self.browser = BrowserProcess(profile)
+        self.address = address
+
+    def start(self, title="usable"):
+        """Load the page in a new tab; return the times of usable and of the first paint [s]."""
+        shown = self.browser.visit(self.address, title)
+        return [float(word) / 1000 for word in shown.split()[-2:]]
 
 
-def start_s(page, address):
-    """Return the seconds from navigation to usable."""
-    begun = time.perf_counter()
-    page.goto(address, wait_until="commit")
-    page.wait_for_selector(STARTED, state="attached", timeout=START_MS)
-    assert page.locator("html[data-app=usable]").count(), page.locator("#failure").text_content()
-    return time.perf_counter() - begun
+def measured(folder, lever=None):
+    """Make a copy of the built site that tells its times, with one lever undone if one is named."""
+    shutil.copytree(DEFAULT_SITE, folder, ignore=shutil.ignore_patterns("*.br", "*.gz"))
+    release = json.loads((folder / "release.json").read_text("utf-8"))["release"]
+    with (folder / "r" / release / "status.js").open("a", encoding="utf-8") as script:
+        script.write(STOPWATCH)
+    if lever:
+        undo(lever, folder, folder / "r" / release)
+    list_anew(folder)
+    return folder
 
 
-def visit(browser, site):
-    """Return first, warm and offline start [s]."""
-    server = Server(site)
-    context = browser.new_context(**PHONE)
-    page = context.new_page()
-    first = start_s(page, server.address)
-    page.wait_for_selector("html[data-offline=ready]", state="attached", timeout=OFFLINE_MS)
-    start_s(page, server.address)  # the first start from the kept files compiles their code
-    warm = start_s(page, server.address)
+def ours_offline(folder, lever=None, fill=None):
+    """Visit our site, kill its server, and return the visitor and the first visit's times."""
+    server = Server(measured(folder / "site", lever))
+    visitor = Visitor(folder / "profile", server.address)
+    first = visitor.start("usable ready")
+    if fill:
+        fill(visitor)
     server.kill()
-    offline = start_s(page, server.address)
-    context.close()
-    return first, warm, offline
+    for _ in range(WARM_UPS):
+        visitor.start()
+    return visitor, first
+
+
+def in_turn(visitors, runs):
+    """Let visitors start in turn; return the times to usable of each."""
+    times = {name: [] for name in visitors}
+    for _ in range(runs):
+        for name, visitor in visitors.items():
+            times[name].append(visitor.start()[0])
+    return times
+
+
+def slowly(visitors, runs):
+    """The same with the browsers slowed down."""
+    times = {name: [] for name in visitors}
+    for _ in range(runs):
+        for name, visitor in visitors.items():
+            with visitor.browser.slowed(SLOWER):
+                times[name].append(visitor.start()[0])
+    return times
+
+
+def show(name, times):
+    low, *_, high = quantiles(times, n=10, method="inclusive")
+    print(f"{name:58} {median(times):6.2f}  ({low:.2f} to {high:.2f})", flush=True)
+
+
+def show_ratio(times):
+    ratio = median(times["ours, offline"]) / median(times["bare page, warm cache"])
+    print(f"{'ratio':58} {ratio:6.2f}  (goal: at most {GOAL})", flush=True)
+
+
+def compare(folder, runs):
+    (folder / "bare").mkdir()
+    make_bare_page(folder / "bare", f"<script>{STOPWATCH}</script>")
+    server = BareServer(folder / "bare")
+    bare = Visitor(folder / "bare-profile", server.address)
+    bare_first, *_ = [bare.start() for _ in range(1 + WARM_UPS)]
+    ours, ours_first = ours_offline(folder / "ours")
+    print(
+        f"First visit, server on this machine, nothing compressed for ours [s]: "
+        f"usable {ours_first[0]:.2f}, bare page {bare_first[0]:.2f}; splash {ours_first[1]:.2f}"
+    )
+    print(f"\n{f'Navigation to usable [s], median of {runs}':58}         (10 to 90 %)")
+    visitors = {"bare page, warm cache": bare, "ours, offline": ours}
+    for measure, note in ((in_turn, ""), (slowly, ", 4x slower")):
+        times = measure(visitors, runs)
+        for name in visitors:
+            show(name + note, times[name])
+        show_ratio(times)
+    bare.browser.kill()
+    ours.browser.kill()
+    server.kill()
+
+
+def compare_many(folder, runs):
+    def fill(visitor):
+        with sync_playwright() as playwright:
+            watched = playwright.chromium.connect_over_cdp(visitor.browser.endpoint)
+            save_many(watched.contexts[0], visitor.address, MANY)
+            watched.close()
+
+    visitor, _ = ours_offline(folder / "many", fill=fill)
+    show(f"ours, offline, {MANY} setups saved", in_turn({"": visitor}, runs)[""])
+    visitor.browser.kill()
+
+
+def compare_levers(folder, runs):
+    print("\nOurs with one thing undone:")
+    for number, lever in enumerate(LEVERS):
+        visitor, _ = ours_offline(folder / f"lever-{number}", lever)
+        show(f"not: {lever}", in_turn({"": visitor}, runs)[""])
+        visitor.browser.kill()
 
 
 def main():
-    runs = int(sys.argv[1]) if len(sys.argv) > 1 else 7
-    with tempfile.TemporaryDirectory() as name, sync_playwright() as playwright:
-        folder = Path(name)
-        sites = {"ours": build(folder, "ours"), "bare": build(folder, "bare", BARE)}
-        wire = {
-            name: sum(
-                path.stat().st_size
-                for path in site.rglob("*.br")
-                if "canvaskit/canvaskit" not in str(path)
-            )
-            for name, site in sites.items()
-        }
-        browser = launch(playwright)
-        figures = {name: [] for name in sites}
-        for _ in range(runs):  # in turn, so that a busy machine is busy for both
-            for kind, site in sites.items():
-                figures[kind].append(visit(browser, site))
-        browser.close()
-    print(f"medians of {runs} [s]   first visit   warm   offline   all kept, brotli [MB]")
-    medians = {
-        kind: [median(column) for column in zip(*rows, strict=True)]
-        for kind, rows in figures.items()
-    }
-    for kind, (first, warm, offline) in medians.items():
-        print(f"{kind:18} {first:12.2f} {warm:8.2f} {offline:8.2f} {wire[kind] / 1e6:12.2f}")
-    ratios = [ours / bare for ours, bare in zip(medians["ours"], medians["bare"], strict=True)]
-    print(f"{'ours / bare':18} {ratios[0]:12.2f} {ratios[1]:8.2f} {ratios[2]:8.2f}")
+    parser = argparse.ArgumentParser(prog="python -m tests.bench.start")
+    parser.add_argument("runs", nargs="?", type=int, default=7)
+    parser.add_argument("--levers", action="store_true", help="also measure each lever's gain")
+    options = parser.parse_args()
+    build_if_needed(DEFAULT_SITE)
+    with tempfile.TemporaryDirectory() as name:
+        compare(Path(name), options.runs)
+        compare_many(Path(name), options.runs)
+        if options.levers:
+            compare_levers(Path(name), options.runs)
 
 
 if __name__ == "__main__":

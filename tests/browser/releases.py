@@ -20,6 +20,12 @@ def next_release(site, folder):
         if path.suffix in TEXT:
             text = path.read_text("utf-8").replace(old, new)
             path.write_text(text + ("/* next */" if path.name == CHANGED else ""), "utf-8")
+    list_anew(folder)
+    return folder
+
+
+def list_anew(folder):
+    """Make a changed site's lists true again: sizes and hashes."""
     worker = (folder / "sw.js").read_text("utf-8")
     kept = re.search(r"const FILES = (\[.*?\])\.filter", worker, re.DOTALL)[1]
     files = json.loads(kept)
@@ -33,7 +39,6 @@ def next_release(site, folder):
         content = (folder / file["path"]).read_bytes()
         file |= {"bytes": len(content), "sha256": sha256(content).hexdigest()}
     (folder / "release.json").write_text(json.dumps(whole), "utf-8")
-    return folder
 
 
 def release_of(phone):
