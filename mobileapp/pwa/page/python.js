@@ -1,27 +1,18 @@
 // The Python worker, and the line between it and Flet's client.
 //
-// The worker starts with the page, long before the client asks for it. What Python sends until
-// then waits here. Two kinds of messages travel: the client's packets, which are byte arrays, and
-// ours, which are objects {kind, …}.
+// The worker starts with the page, long before the client asks for it; what the client sends before
+// Python is there waits in the worker. Two kinds of messages travel: the client's packets, which are
+// byte arrays, and ours, which are objects {kind, …}.
 
 const worker = new Worker(new URL("worker.js", import.meta.url), { type: "module" });
 worker.postMessage({ kind: "start", documentUrl: document.URL });
 
 const listeners = new Map();
-const early = [];
-let toClient;
-let pythonIsReady;
-const ready = new Promise((resolve) => (pythonIsReady = resolve));
+let toClient; // there before the first packet: Python speaks only when spoken to
 
 worker.onmessage = ({ data }) => {
-  if (data.kind === undefined) {
-    if (toClient) toClient(data);
-    else early.push(data);
-  } else if (data.kind === "ready") {
-    pythonIsReady();
-  } else {
-    listeners.get(data.kind)?.(data);
-  }
+  if (data.kind === undefined) toClient(data);
+  else listeners.get(data.kind)?.(data);
 };
 
 /** Call `listener` with each of the worker's messages of a kind. */
@@ -41,8 +32,6 @@ export function toPython(message) {
 // What Flet's client calls, by these names: once to connect, then for each packet.
 globalThis.jsConnect = async (_app, _args, onPacket) => {
   toClient = onPacket;
-  await ready;
-  early.splice(0).forEach(onPacket);
 };
 globalThis.jsSend = async (_app, packet) => worker.postMessage(packet, [packet.buffer]);
 globalThis.jsDisconnect = async () => {};

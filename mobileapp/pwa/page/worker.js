@@ -9,16 +9,18 @@ const tell = (message) => self.postMessage(message);
 
 // Everything Python needs from the page, importable there as `page_bridge`; see browser.py.
 let toApp = () => {};
+let clientIsLoading = true; // until it sends its first packet
 let lateStarted;
 const bridge = {
   post: (kind, value) => tell({ kind, ...value }),
   listen: (callback) => (toApp = callback),
   late: () => (lateStarted ??= load("late.pack").then(unpack)),
+  client_is_loading: () => clientIsLoading,
 };
 
 // Under this name Flet's own connection leaves its functions for us to call.
 const flet = {};
-const early = [];
+let early = []; // the client's packets until Python listens
 
 self.onmessage = ({ data }) => {
   if (data.kind === "start") {
@@ -26,10 +28,10 @@ self.onmessage = ({ data }) => {
     start().catch(explain);
   } else if (data.kind !== undefined) {
     toApp(JSON.stringify(data));
-  } else if (flet.send) {
-    flet.send(data);
   } else {
-    early.push(data);
+    clientIsLoading = false;
+    if (early) early.push(data);
+    else flet.send(data);
   }
 };
 
@@ -63,9 +65,14 @@ async function start() {
     const bytes = packet.toJs();
     self.postMessage(bytes, [bytes.buffer]);
   });
-  early.splice(0).forEach((packet) => flet.send(packet));
-  tell({ kind: "ready" });
-  pyodide.runPythonAsync("from mobileapp.warm_up import warm_up; await warm_up()").catch(explain);
+  early.forEach((packet) => flet.send(packet));
+  early = undefined;
+  pyodide
+    .runPythonAsync(
+      "import mobileapp.warm_up, page_bridge\n" +
+        "await mobileapp.warm_up.warm_up(page_bridge.client_is_loading)",
+    )
+    .catch(explain);
 }
 
 async function load(name) {
